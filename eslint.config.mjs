@@ -3,12 +3,25 @@ import prettier from 'eslint-config-prettier';
 import tseslint from 'typescript-eslint';
 
 export default tseslint.config(
-  { ignores: ['dist/', '.data/', '.angular/', 'coverage/', 'node_modules/', 'libs/contracts/src/generated/', 'test-results/'] },
+  {
+    ignores: [
+      'dist/',
+      '.data/',
+      '.angular/',
+      'coverage/',
+      'node_modules/',
+      'libs/contracts/src/generated/',
+      'test-results/',
+    ],
+  },
   ...tseslint.configs.recommended,
   {
     files: ['**/*.ts'],
     rules: {
-      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
+      '@typescript-eslint/no-unused-vars': [
+        'error',
+        { argsIgnorePattern: '^_', varsIgnorePattern: '^_' },
+      ],
       '@typescript-eslint/no-explicit-any': 'error',
       '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports' }],
       eqeqeq: ['error', 'smart'],
@@ -22,8 +35,14 @@ export default tseslint.config(
     extends: [...angular.configs.tsRecommended],
     processor: angular.processInlineTemplates,
     rules: {
-      '@angular-eslint/component-selector': ['error', { type: 'element', prefix: 'tw', style: 'kebab-case' }],
-      '@angular-eslint/directive-selector': ['error', { type: 'attribute', prefix: 'tw', style: 'camelCase' }],
+      '@angular-eslint/component-selector': [
+        'error',
+        { type: 'element', prefix: 'tw', style: 'kebab-case' },
+      ],
+      '@angular-eslint/directive-selector': [
+        'error',
+        { type: 'attribute', prefix: 'tw', style: 'camelCase' },
+      ],
       '@angular-eslint/component-class-suffix': 'off',
       '@angular-eslint/directive-class-suffix': 'off',
       '@angular-eslint/prefer-on-push-component-change-detection': 'error',
@@ -38,13 +57,27 @@ export default tseslint.config(
     files: ['libs/domain/src/**/*.ts'],
     rules: {
       // Pure computation: no clock, no randomness, no environment (architecture decision 0002).
-      'no-restricted-globals': ['error', 'process', 'setTimeout', 'setInterval', 'fetch', 'window', 'document'],
+      'no-restricted-globals': [
+        'error',
+        'process',
+        'setTimeout',
+        'setInterval',
+        'fetch',
+        'window',
+        'document',
+      ],
       'no-restricted-properties': [
         'error',
         { object: 'Date', property: 'now' },
         { object: 'Math', property: 'random' },
       ],
-      'no-restricted-syntax': ['error', { selector: "NewExpression[callee.name='Date'][arguments.length=0]", message: 'libs/domain has no clock: take the date as an argument.' }],
+      'no-restricted-syntax': [
+        'error',
+        {
+          selector: "NewExpression[callee.name='Date'][arguments.length=0]",
+          message: 'libs/domain has no clock: take the date as an argument.',
+        },
+      ],
     },
   },
   { files: ['**/*.{cjs,mjs}'], rules: { '@typescript-eslint/no-require-imports': 'off' } },

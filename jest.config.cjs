@@ -9,13 +9,27 @@ const aliases = {
 };
 
 // These packages ship ES modules only; Jest runs CommonJS, so they are compiled like our own code.
-const esmOnly = ['dinero.js', 'rrule-temporal', 'temporal-polyfill', 'temporal-spec', 'temporal-utils', 'uuid', 'cookie', 'csv-parse', 'jsbi', 'ical.js'];
+const esmOnly = [
+  'dinero.js',
+  'rrule-temporal',
+  'temporal-polyfill',
+  'temporal-spec',
+  'temporal-utils',
+  'uuid',
+  'cookie',
+  'csv-parse',
+  'jsbi',
+  'ical.js',
+];
 
 const node = {
   rootDir: __dirname,
   testEnvironment: 'node',
   transform: {
-    '^.+\\.[cm]?[tj]s$': ['@swc/jest', { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' }, module: { type: 'commonjs' } }],
+    '^.+\\.[cm]?[tj]s$': [
+      '@swc/jest',
+      { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' }, module: { type: 'commonjs' } },
+    ],
   },
   transformIgnorePatterns: [`/node_modules/(?!(${esmOnly.join('|')})/)`],
   moduleNameMapper: aliases,
@@ -34,7 +48,11 @@ module.exports = {
     {
       ...node,
       displayName: 'node',
-      testMatch: ['<rootDir>/libs/{domain,contracts}/src/**/*.spec.ts', '<rootDir>/server/src/**/*.spec.ts', '<rootDir>/infra/**/*.spec.ts'],
+      testMatch: [
+        '<rootDir>/libs/{domain,contracts}/src/**/*.spec.ts',
+        '<rootDir>/server/src/**/*.spec.ts',
+        '<rootDir>/infra/**/*.spec.ts',
+      ],
     },
     { ...node, displayName: 'checks', testMatch: ['<rootDir>/test/checks/**/*.spec.ts'] },
     {

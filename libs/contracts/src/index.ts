@@ -1,0 +1,10 @@
+export * from './enums';
+export * from './lists';
+export * from './openapi';
+export * from './operation';
+export * from './operations';
+export * from './permissions';
+export * from './problems';
+export * from './session';
+export * as text from './text';
+export * as values from './values';
