@@ -1,0 +1,3 @@
+export * from './calendar/iso';
+export * from './calendar/month';
+export * from './calendar/trade-day';
