@@ -60,6 +60,7 @@ module.exports = {
       displayName: 'api',
       testMatch: ['<rootDir>/test/api/**/*.spec.ts'],
       globalSetup: '<rootDir>/test/support/global-setup.ts',
+      globalTeardown: '<rootDir>/test/support/global-teardown.ts',
       setupFilesAfterEnv: ['<rootDir>/test/support/after-env.ts'],
     },
     {
@@ -67,6 +68,7 @@ module.exports = {
       displayName: 'faults',
       testMatch: ['<rootDir>/test/faults/**/*.spec.ts'],
       globalSetup: '<rootDir>/test/support/global-setup.ts',
+      globalTeardown: '<rootDir>/test/support/global-teardown.ts',
       setupFilesAfterEnv: ['<rootDir>/test/support/after-env.ts'],
     },
   ],

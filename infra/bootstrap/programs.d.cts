@@ -1,0 +1,2 @@
+export function findPostgres(): string | undefined;
+export function findChromium(): string | undefined;

@@ -1,0 +1,39 @@
+// Every command of package.json begins here: a bare machine has Node.js and npm, and nothing else.
+// Then the driver proper, in TypeScript, is loaded by the tsx that has just been installed.
+
+import { createRequire } from 'node:module';
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { ensureChromium, ensurePostgres } from './debian.mjs';
+import { ensurePackages } from './packages.mjs';
+import progressModule from './progress.cjs';
+
+const { Advice, reportAndExit } = progressModule;
+
+export const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../..');
+
+function checkNode() {
+  const [major = 0, minor = 0] = process.versions.node.split('.').map(Number);
+  if (major > 20 || (major === 20 && minor >= 19)) return;
+  throw new Advice(
+    `Node.js ${process.versions.node} is too old for Tumblewright.`,
+    'Install Node.js 20.19 or newer (of the 20 series), then run the command again.',
+  );
+}
+
+/** Makes ready what `needs` names, then runs the driver `infra/<driver>.ts`. */
+export async function run(driver, needs = {}) {
+  try {
+    checkNode();
+    process.chdir(root);
+    await ensurePackages(root);
+    if (needs.postgres) await ensurePostgres();
+    if (needs.chromium) await ensureChromium();
+    const require = createRequire(import.meta.url);
+    const tsx = require('tsx/cjs/api');
+    const { main } = tsx.require(path.join(root, 'infra', `${driver}.ts`), import.meta.url);
+    await main(process.argv.slice(2));
+  } catch (error) {
+    reportAndExit(error);
+  }
+}

@@ -1,0 +1,3 @@
+import { run } from './bootstrap/run.mjs';
+
+await run('reset');
