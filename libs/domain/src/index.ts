@@ -22,3 +22,21 @@ export {
 } from './ledger/posting';
 export * from './ledger/settlement-postings';
 export * from './ledger/trial-balance';
+export * from './words/trade';
+export {
+  type Integer,
+  type RoundingMode,
+  multiplyDivide,
+  roundFraction,
+  roundHalfEven,
+  roundHalfUp,
+  roundToStep,
+} from './money/rounding';
+export * from './money/share';
+export * from './money/currency';
+export * from './money/amount';
+export * from './tax/rate';
+export * from './pricing/edition';
+export * from './pricing/visit';
+export * from './warranty/case';
+export * from './warranty/ruling';
