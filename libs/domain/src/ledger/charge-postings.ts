@@ -1,27 +1,27 @@
+import { addUp } from '../money/amount';
+import { type Bearer, type LineKind } from '../words/trade';
 import { type AccountCode } from './accounts';
 import { type Posting, gathered, minor, negated, reversed } from './posting';
 
 /** Where a line of each kind is earned. Minutes lost to bad access are labour. */
-const revenueAccounts = {
+const revenueAccounts: Record<LineKind, AccountCode> = {
   trip: 'revenue_trip',
   labour: 'revenue_labour',
   access: 'revenue_labour',
   part: 'revenue_parts',
   fee: 'revenue_contract',
   late_charge: 'revenue_late',
-} as const satisfies Record<string, AccountCode>;
-
-export type RevenueKind = keyof typeof revenueAccounts;
+};
 
 /** A line that a store is charged: minor units without tax; below zero for an allowance. */
 export interface RevenueLine {
-  kind: RevenueKind;
+  kind: LineKind;
   charged: number;
 }
 
 /** A priced line of a ticket. Amounts in minor units. */
 export interface TicketPostingLine extends RevenueLine {
-  bearer: 'store' | 'shop' | 'supplier' | 'contract' | 'goodwill';
+  bearer: Bearer;
   /** What the line cost the shop itself: wages and purchase price. */
   ownCost: number;
 }
@@ -95,7 +95,7 @@ function chargePostings(
     storeId,
     amount: negated(minor(charged)),
   }));
-  const owed = lines.reduce((sum, { charged }) => sum + charged, minor(tax));
+  const owed = addUp([...lines.map(({ charged }) => charged), tax]);
   return [
     { account: owedOn, storeId, amount: owed },
     ...revenue,

@@ -1,11 +1,10 @@
+import { decimalFromAmount } from '../money/amount';
 import { accountGroups } from './accounts';
 import { type LedgerDocument, balanced } from './posting';
 
 export interface JournalOptions {
   /** ISO 4217 code, `USD`. */
   currency: string;
-  /** Decimals of the currency's minor unit by ISO 4217: 2 for most, 0 for JPY, 3 for KWD. */
-  decimals: number;
   /** What a store is called in account names; its id when not given. */
   storeName?: (storeId: string) => string;
 }
@@ -20,13 +19,13 @@ export interface JournalOptions {
  */
 export function journalText(
   documents: Iterable<LedgerDocument>,
-  { currency, decimals, storeName = (id) => id }: JournalOptions,
+  { currency, storeName = (id) => id }: JournalOptions,
 ): string {
   const transactions: string[] = [];
   for (const document of documents) {
     const postings = balanced(document).postings.map(({ account, storeId, amount }) => {
       const name = `${accountGroups[account]}:${account}:${nameText(storeName(storeId)) || nameText(storeId)}`;
-      return `    ${name}  ${decimalText(amount, decimals)} ${currency}`;
+      return `    ${name}  ${decimalFromAmount(amount, currency)} ${currency}`;
     });
     const title = `${document.date} (${nameText(document.reference)}) ${document.kind}`;
     transactions.push([title, ...postings, ''].join('\n'));
@@ -37,11 +36,4 @@ export function journalText(
 /** Characters with a meaning of their own in the format become spaces, and spaces single ones. */
 function nameText(text: string): string {
   return text.replace(/[\s:;|()[\]@=]+/g, ' ').trim();
-}
-
-function decimalText(amount: number, decimals: number): string {
-  const digits = String(Math.abs(amount)).padStart(decimals + 1, '0');
-  const whole = digits.slice(0, digits.length - decimals);
-  const fraction = decimals > 0 ? `.${digits.slice(-decimals)}` : '';
-  return `${amount < 0 ? '-' : ''}${whole}${fraction}`;
 }

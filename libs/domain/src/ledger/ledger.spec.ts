@@ -1,6 +1,6 @@
 import * as fc from 'fast-check';
+import { type LineKind } from '../words/trade';
 import {
-  type RevenueKind,
   type TicketForPosting,
   creditNotePostings,
   feePostings,
@@ -113,7 +113,7 @@ describe('balance', () => {
 
   const amount = fc.integer({ min: 1, max: 1_000_000 });
   const store = fc.constantFrom('suds', 'bubbles', 'spin');
-  const revenueKind = fc.constantFrom<RevenueKind>('trip', 'labour', 'access', 'part');
+  const revenueKind = fc.constantFrom<LineKind>('trip', 'labour', 'access', 'part');
   const ticketLine = fc.oneof(
     fc.record({
       kind: revenueKind,

@@ -1,3 +1,4 @@
+import { addUp } from '../money/amount';
 import { type AccountCode } from './accounts';
 
 /** One posting. `amount` is in minor units of the shop's currency: debit above zero, credit below. */
@@ -34,7 +35,7 @@ export interface LedgerDocument {
  *   be posted
  */
 export function balanced<D extends { postings: readonly Posting[] }>(document: D): D {
-  const sum = document.postings.reduce((total, posting) => total + minor(posting.amount), 0);
+  const sum = addUp(document.postings.map(({ amount }) => amount));
   if (sum !== 0) throw new RangeError(`Postings sum to ${sum} minor units, not to zero`);
   return document;
 }
