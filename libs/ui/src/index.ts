@@ -1,0 +1,38 @@
+export { BearerLabel } from './notes/bearer-label';
+export { Callout } from './notes/callout';
+export { ChoiceChips, type Choice } from './choices/choice-chips';
+export { CountStepper } from './choices/count-stepper';
+export { FieldError, errorText } from './choices/field-error';
+export { EmptyNote } from './notes/empty-note';
+export { type FloorBank, type FloorBay, type FloorChoice } from './floor/floor-bay';
+export { FloorPlan } from './floor/floor-plan';
+export { ListShell } from './list/list-shell';
+export {
+  type ListAsk,
+  type ListControls,
+  type ListPage,
+  ListState,
+  listState,
+} from './list/list-state';
+export { MachineGlyph } from './machine-glyph/machine-glyph';
+export { MoneyText } from './format/money-text';
+export { amountFrom, currencySign, minorDigits, moneyText } from './format/money';
+export { PageHead } from './head/page-head';
+export { ProblemNote } from './notes/problem-note';
+export { problemText } from './notes/problem-text';
+export { ProgressLine } from './notes/progress-line';
+export { Reading } from './format/reading';
+export { StatusLine } from './notes/status-line';
+export { TicketCard } from './ticket/ticket-card';
+export { ClockPipe, DayPipe, InstantPipe, MinutesPipe, MonthPipe } from './format/time-pipes';
+export { clockText, dayIn, dayText, instantText, minutesText, monthText } from './format/times';
+export {
+  type Colour,
+  colours,
+  type ContrastPair,
+  contrastPairs,
+  type Copy,
+  copyEdges,
+  type SchemePair,
+} from './tokens/tokens';
+export { counted, labelFor, LabelPipe, wordFor, WordPipe } from './words/words';
