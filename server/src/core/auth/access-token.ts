@@ -1,0 +1,46 @@
+import { type Role } from '@lib/contracts';
+import jwt from 'jsonwebtoken';
+import passport from 'passport';
+import { ExtractJwt, Strategy } from 'passport-jwt';
+
+/** What an access token says: who, on which chain of devices, and as what they work now. */
+export interface Claims {
+  sub: string;
+  sid: string;
+  name: string;
+  mid?: string;
+  role?: Role;
+  shop?: string;
+  client?: string;
+  store?: string;
+}
+
+const issuer = 'tumblewright';
+/** Short, because a token is not looked up: what was taken away ends with it. */
+export const accessTokenSeconds = 600;
+
+export function signAccessToken(
+  claims: Claims,
+  secret: string,
+): { token: string; expiresAt: Date } {
+  const token = jwt.sign(claims, secret, {
+    algorithm: 'HS256',
+    issuer,
+    expiresIn: accessTokenSeconds,
+  });
+  return { token, expiresAt: new Date(Date.now() + accessTokenSeconds * 1000) };
+}
+
+export function useAccessTokens(secret: string): void {
+  passport.use(
+    new Strategy(
+      {
+        jwtFromRequest: ExtractJwt.fromAuthHeaderAsBearerToken(),
+        secretOrKey: secret,
+        algorithms: ['HS256'],
+        issuer,
+      },
+      (claims: Claims, done) => done(null, claims),
+    ),
+  );
+}

@@ -1,0 +1,29 @@
+import { type Operation } from '@lib/contracts';
+import express, { type RequestHandler } from 'express';
+import multer from 'multer';
+import { problem } from '../problems/problem';
+
+const upload = multer({
+  storage: multer.memoryStorage(),
+  limits: { fileSize: 12 * 1024 * 1024, files: 1, fields: 8, parts: 10, fieldSize: 4096 },
+});
+const json = express.json({ limit: '512kb', strict: true, type: 'application/json' });
+
+/** Reads the body the operation takes, and refuses any other kind. */
+export function readBody(operation: Operation): RequestHandler[] {
+  const type = operation.bodyType ?? (operation.body ? 'application/json' : undefined);
+  if (!type) return [];
+  const ofType: RequestHandler = (request, _response, next) =>
+    next(request.is(type) ? undefined : problem('unsupported-content', `Send ${type}.`));
+  return type === 'multipart/form-data' ? [ofType, readFile()] : [ofType, json];
+}
+
+function readFile(): RequestHandler {
+  const single = upload.single('file');
+  return (request, response, next) =>
+    single(request, response, (error: unknown) => {
+      if (!error) return next();
+      const tooLarge = (error as { code?: string }).code === 'LIMIT_FILE_SIZE';
+      next(problem(tooLarge ? 'too-large' : 'malformed-request'));
+    });
+}

@@ -1,0 +1,102 @@
+import { type Page } from '@lib/contracts';
+import { type Bind, rows } from '../database/tenancy';
+import { invalid } from '../problems/problem';
+
+/** A column to sort by, ending in the id so that the order is total. */
+export interface SortKey {
+  column: string;
+  type: 'text' | 'date' | 'timestamptz' | 'bigint';
+  descending?: boolean;
+}
+
+export interface ListSource {
+  /** `select ... from ...` without where; its columns are the row's. */
+  select: string;
+  /** Conditions that always hold and that the filters add, joined by `and`. */
+  where: string[];
+  bind: Bind;
+  sort: SortKey;
+  /** The id that ends every order, e.g. `s.id`. */
+  id: string;
+  limit: number;
+  cursor: string | undefined;
+  /** What `count` counts, e.g. `stores s`; default: the select's from. */
+  from: string;
+}
+
+const countCap = 1000;
+
+/** One page of a keyset list, and how many rows there are up to a cap. */
+export async function page<R extends object, T>(
+  source: ListSource,
+  present: (row: R) => T,
+): Promise<Page<T>> {
+  const { sort } = source;
+  const order = sort.descending ? 'desc' : 'asc';
+  const after = source.cursor === undefined ? undefined : readCursor(source.cursor);
+  const where = [...source.where];
+  const bind = { ...source.bind };
+  if (after) {
+    const compare = sort.descending ? '<' : '>';
+    where.push(
+      `(${sort.column}, ${source.id}) ${compare} ($afterValue::${sort.type}, $afterId::uuid)`,
+    );
+    bind.afterValue = after[0];
+    bind.afterId = after[1];
+  }
+  const found = await rows<R & { sort_value: string; sort_id: string }>(
+    `${source.select.replace(/^\s*select/i, `select (${sort.column})::text as sort_value, ${source.id} as sort_id,`)}
+     where ${where.join(' and ')}
+     order by ${sort.column} ${order}, ${source.id} ${order}
+     limit ${source.limit + 1}`,
+    bind,
+  );
+  const [count] = await rows<{ n: number }>(
+    `select count(*)::int as n from (select 1 from ${source.from}
+     where ${source.where.join(' and ')} limit ${countCap + 1}) counted`,
+    source.bind,
+  );
+  const items = found.slice(0, source.limit);
+  const last = items.at(-1);
+  const n = count?.n ?? 0;
+  return {
+    items: items.map(present),
+    next: found.length > source.limit && last ? writeCursor(last.sort_value, last.sort_id) : null,
+    count: { value: Math.min(n, countCap), capped: n > countCap },
+  };
+}
+
+function writeCursor(value: string, id: string): string {
+  return Buffer.from(JSON.stringify([value, id])).toString('base64url');
+}
+
+const idShape = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/;
+
+function readCursor(cursor: string): [string, string] {
+  try {
+    const read = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8')) as unknown;
+    if (Array.isArray(read) && read.length === 2) {
+      const [value, id] = read as [unknown, unknown];
+      if (
+        typeof value === 'string' &&
+        typeof id === 'string' &&
+        idShape.test(id) &&
+        !value.includes('\u0000')
+      )
+        return [value, id];
+    }
+  } catch {
+    // Falls through to the same answer as any other cursor we did not write.
+  }
+  throw invalid([{ pointer: '/cursor', in: 'query', detail: 'is not a cursor of this list' }]);
+}
+
+/** A condition for words to search for: the folded text holds them. Escapes the wildcards of LIKE. */
+export function searched(q: string | undefined, columns: string[], bind: Bind): string[] {
+  if (!q?.trim()) return [];
+  bind.q = `%${q
+    .trim()
+    .toLowerCase()
+    .replace(/[\\%_]/g, '\\$&')}%`;
+  return [`app.fold(${columns.map((c) => `coalesce(${c}, '')`).join(" || ' ' || ")}) like $q`];
+}

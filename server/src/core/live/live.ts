@@ -1,0 +1,85 @@
+import { EventEmitter } from 'node:events';
+import pg from 'pg';
+import { type Response } from 'express';
+import { type Context } from '../context';
+import { write } from '../database/tenancy';
+import { type Log } from '../logging';
+
+/** What changed, in words the browser knows; ids only, the browser asks again for the rest. */
+export interface LiveEvent {
+  shopId: string;
+  clientId: string | null;
+  kind: string;
+  id: string | null;
+}
+
+const channel = 'tumblewright_live';
+const changes = new EventEmitter().setMaxListeners(0);
+
+/** Tells everyone who follows the shop, when the open transaction commits. */
+export async function announce(
+  context: Pick<Context, 'shopId'>,
+  kind: string,
+  id: string | null,
+  clientId: string | null = null,
+): Promise<void> {
+  const event: LiveEvent = { shopId: context.shopId, clientId, kind, id };
+  await write('select pg_notify($channel, $event)', { channel, event: JSON.stringify(event) });
+}
+
+/** Listens on a connection of its own, and connects again when it breaks. */
+export function listenForChanges(url: string, log: Log): { close(): Promise<void> } {
+  let client: pg.Client | undefined;
+  let closed = false;
+  const start = async (): Promise<void> => {
+    const next = new pg.Client({ connectionString: url, application_name: 'tumblewright-live' });
+    const again = () => {
+      if (client !== next || closed) return;
+      client = undefined;
+      setTimeout(() => void start().catch(again), 1000).unref();
+    };
+    client = next;
+    next.on('error', again);
+    next.on('end', again);
+    next.on('notification', ({ payload }) => {
+      if (payload) changes.emit('change', JSON.parse(payload) as LiveEvent);
+    });
+    try {
+      await next.connect();
+      await next.query(`listen ${channel}`);
+    } catch (error) {
+      log.warn({ err: error }, 'live updates: cannot listen, trying again');
+      again();
+    }
+  };
+  void start();
+  return {
+    close: async () => {
+      closed = true;
+      await client?.end().catch(() => undefined);
+    },
+  };
+}
+
+/** Keeps an answer open and writes each change the person may know of (Server-Sent Events). */
+export function followChanges(context: Context, response: Response): void {
+  response.status(200).set({
+    'Content-Type': 'text/event-stream',
+    'Cache-Control': 'no-store',
+    'X-Accel-Buffering': 'no',
+  });
+  response.write('retry: 2000\n: following\n\n');
+  const onChange = (event: LiveEvent) => {
+    if (event.shopId !== context.shopId) return;
+    if (context.clientId && event.clientId !== context.clientId) return;
+    response.write(
+      `event: ${event.kind}\ndata: ${JSON.stringify({ kind: event.kind, id: event.id })}\n\n`,
+    );
+  };
+  const beat = setInterval(() => response.write(': still here\n\n'), 20_000);
+  changes.on('change', onChange);
+  response.on('close', () => {
+    clearInterval(beat);
+    changes.off('change', onChange);
+  });
+}

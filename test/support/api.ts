@@ -1,0 +1,35 @@
+import { type OperationId, operations, type Operation, storesAnswer } from '@lib/contracts';
+import { type Express } from 'express';
+import request, { type Response } from 'supertest';
+import { v7 as uuid } from 'uuid';
+
+export interface Ask {
+  params?: Record<string, string>;
+  query?: Record<string, unknown>;
+  body?: unknown;
+  version?: number;
+  /** The Idempotency-Key; a fresh one by default. */
+  key?: string;
+  file?: { name: string; content: Buffer };
+}
+
+/** Calls operations by their ids, as one person: `api(app, office.token).call('stores.list')`. */
+export function api(app: Express, token?: string) {
+  return {
+    async call(id: OperationId, ask: Ask = {}): Promise<Response> {
+      const operation = operations[id] as Operation;
+      const path = operation.path.replaceAll(/:(\w+)/g, (_, name: string) =>
+        encodeURIComponent(ask.params?.[name] ?? ''),
+      );
+      const method = operation.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
+      let sent = request(app)
+        [method](path)
+        .query(ask.query ?? {});
+      if (token) sent = sent.set('Authorization', `Bearer ${token}`);
+      if (ask.version !== undefined) sent = sent.set('If-Match', `"${ask.version}"`);
+      if (storesAnswer(operation)) sent = sent.set('Idempotency-Key', ask.key ?? uuid());
+      if (ask.file) return sent.attach('file', ask.file.content, ask.file.name);
+      return ask.body === undefined ? sent : sent.send(ask.body as object);
+    },
+  };
+}
