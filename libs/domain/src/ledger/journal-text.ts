@@ -24,7 +24,8 @@ export function journalText(
   const transactions: string[] = [];
   for (const document of documents) {
     const postings = balanced(document).postings.map(({ account, storeId, amount }) => {
-      const name = `${accountGroups[account]}:${account}:${nameText(storeName(storeId)) || nameText(storeId)}`;
+      const store = nameText(storeName(storeId)) || nameText(storeId);
+      const name = `${accountGroups[account]}:${account}:${store}`;
       return `    ${name}  ${decimalFromAmount(amount, currency)} ${currency}`;
     });
     const title = `${document.date} (${nameText(document.reference)}) ${document.kind}`;

@@ -1,7 +1,7 @@
 import { addUp } from '../money/amount';
 import { type AccountCode } from './accounts';
 
-/** One posting. `amount` is in minor units of the shop's currency: debit above zero, credit below. */
+/** `amount` is in minor units of the shop's currency: debit above zero, credit below. */
 export interface Posting {
   account: AccountCode;
   storeId: string;
@@ -18,7 +18,7 @@ export type DocumentKind =
   | 'credit_note'
   | 'write_off';
 
-/** What stands behind postings. A document once posted is never changed, only followed by another. */
+/** What stands behind postings. Once posted it is never changed, only followed by another. */
 export interface LedgerDocument {
   kind: DocumentKind;
   /** What people call it: `T-0142`. */

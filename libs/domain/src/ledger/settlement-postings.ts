@@ -38,7 +38,7 @@ export function refundPostings(refund: {
   return moved(moneyAccount(method), 'receivable', storeId, positive(amount));
 }
 
-/** A debt the shop gives up: its loss, no revenue taken back. @throws RangeError unless above zero */
+/** A debt the shop gives up; no revenue is taken back. @throws RangeError unless above zero */
 export function writeOffPostings(writeOff: { storeId: string; amount: number }): Posting[] {
   return moved('receivable', 'write_off', writeOff.storeId, positive(writeOff.amount));
 }

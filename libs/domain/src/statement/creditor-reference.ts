@@ -17,7 +17,7 @@ export function rfReference(text: string): string {
   return `RF${String(check).padStart(2, '0')}${reference}`;
 }
 
-/** True for a well-formed reference whose check digits fit. Spaces and small letters are accepted. */
+/** True when well-formed and its check digits fit. Spaces and small letters are accepted. */
 export function isValidRfReference(text: string): boolean {
   const compact = text.replace(/ /g, '').toUpperCase();
   if (!/^RF\d{2}[0-9A-Z]{1,21}$/.test(compact)) return false;
