@@ -57,6 +57,8 @@ export function readConfig(from: NodeJS.ProcessEnv = process.env) {
       webhookSecret: e.STRIPE_WEBHOOK_SECRET,
     },
     sessionSecret: e.SESSION_SECRET,
+    /** Of bcrypt: dear for whoever guesses; cheap in tests, which sign in hundreds of times. */
+    passwordCost: e.NODE_ENV === 'test' ? 4 : 12,
     filesDir: e.FILES_DIR,
     webDir: e.WEB_DIR,
     logLevel: e.LOG_LEVEL,
@@ -64,4 +66,17 @@ export function readConfig(from: NodeJS.ProcessEnv = process.env) {
     signInRateLimit: e.SIGN_IN_RATE_LIMIT,
     trustProxy: e.TRUST_PROXY,
   };
+}
+
+let current: Config | undefined;
+
+/** Called once by the process when it opens its services. */
+export function useConfig(read: Config): void {
+  current = read;
+}
+
+/** What this process was told, for use cases that make links, mails and passwords. */
+export function config(): Config {
+  if (!current) throw new Error('The configuration is not read: call useConfig first.');
+  return current;
 }

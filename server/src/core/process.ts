@@ -1,4 +1,4 @@
-import { type Config } from './config';
+import { type Config, useConfig } from './config';
 import { closeDatabase, openDatabase } from './database/database';
 import { diskFileStore, useFileStore } from './files/file-store';
 import { closeJobs, openJobs } from './jobs/boss';
@@ -7,6 +7,7 @@ import { openStripe } from './payments/stripe';
 
 /** What every process opens before it works, and closes in reverse. */
 export async function openServices(config: Config, log: Log, kind: 'web' | 'worker') {
+  useConfig(config);
   openDatabase({ ...config.database });
   useFileStore(diskFileStore(config.filesDir));
   openStripe(config.card);
