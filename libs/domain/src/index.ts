@@ -47,6 +47,8 @@ export * from './pricing/price-visit';
 export * from './pricing/bill-ticket';
 export * from './warranty/case';
 export * from './warranty/ruling';
+export * from './warranty/propose-ruling';
+export * from './warranty/outcomes';
 export * from './statement/build-statement';
 export * from './statement/canonical-json';
 export * from './statement/check-statement';
