@@ -58,9 +58,13 @@ function describe(operation: Operation): Json {
 }
 
 function requestBody(operation: Operation): Json {
-  const schema = operation.body
-    ? jsonSchema(operation.body, 'input')
-    : { type: 'object', properties: { file: { type: 'string', format: 'binary' } } };
+  const schema: Json = operation.body ? jsonSchema(operation.body, 'input') : { type: 'object' };
+  if (operation.bodyType === 'multipart/form-data') {
+    const properties = (schema.properties ?? {}) as Json;
+    const required = (schema.required ?? []) as string[];
+    schema.properties = { ...properties, file: { type: 'string', format: 'binary' } };
+    schema.required = [...required, 'file'];
+  }
   return { required: true, content: { [operation.bodyType ?? 'application/json']: { schema } } };
 }
 

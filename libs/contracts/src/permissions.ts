@@ -34,6 +34,7 @@ export const permissions = {
   'crew.manage': shopOwner,
   'prices.read': shop,
   'prices.change': shopOwner,
+  'parts.change': desk,
   'clients.read': everyone,
   'clients.change': desk,
   'contacts.read': { ...shop, client_owner: 'client' },
