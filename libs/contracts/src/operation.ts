@@ -33,7 +33,12 @@ export interface OperationShape {
   problems?: readonly ProblemType[];
   bodyType?: 'application/json' | 'multipart/form-data' | 'text/csv';
   answerType?:
-    'application/json' | 'application/pdf' | 'text/csv' | 'text/event-stream' | 'image/*';
+    | 'application/json'
+    | 'application/pdf'
+    | 'text/csv'
+    | 'text/plain'
+    | 'text/event-stream'
+    | 'image/*';
 }
 
 export type Operation = OperationShape & { id: string };

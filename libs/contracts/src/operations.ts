@@ -1,15 +1,22 @@
 import { clientOperations } from './clients';
 import { conditionOperations } from './conditions';
 import { contactOperations } from './contacts';
+import { deliveryOperations } from './deliveries';
 import { exportOperations } from './exports';
 import { fileOperations } from './files';
 import { importOperations } from './imports';
+import { ledgerOperations } from './ledger';
 import { liveOperations } from './live';
 import { bankOperations, machineOperations } from './machines';
+import { contractOperations } from './maintenance';
+import { monthCloseOperations } from './month-close';
 import { partOperations } from './parts';
+import { paymentOperations } from './payments';
 import { priceOperations } from './prices';
+import { receivableOperations } from './receivables';
 import { accountOperations, sessionOperations } from './session';
 import { settingsOperations } from './settings';
+import { statementOperations } from './statements';
 import { storeOperations } from './stores';
 
 /** Everything the API can do: the server answers exactly these, the document lists exactly these. */
@@ -29,6 +36,13 @@ export const operations = {
   ...importOperations,
   ...exportOperations,
   ...liveOperations,
+  ...contractOperations,
+  ...monthCloseOperations,
+  ...statementOperations,
+  ...receivableOperations,
+  ...paymentOperations,
+  ...deliveryOperations,
+  ...ledgerOperations,
 };
 
 export type Operations = typeof operations;
