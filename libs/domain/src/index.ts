@@ -63,3 +63,6 @@ export * from './recurrence/occurrences';
 export { RuleError, parseRule } from './recurrence/rule-parts';
 export * from './recurrence/shift-for-holidays';
 export * from './recurrence/validate-rule';
+export * from './cautions/cautions';
+export * from './csv/formula-cell';
+export * from './contrast/contrast';

@@ -55,7 +55,7 @@ export interface PartToPrice {
 /** What a quantity counts: pieces (and trips), or minutes priced by the hour. */
 export type LineUnit = 'each' | 'minute';
 
-/** How many thousandths of the unit the unit price is for (price base quantity, EN 16931 BT-149). */
+/** Thousandths of the unit that the unit price is for (price base quantity, EN 16931 BT-149). */
 export const PRICE_BASE_MILLI: Readonly<Record<LineUnit, number>> = {
   each: 1_000,
   minute: 60_000,

@@ -32,7 +32,9 @@ export function weighSupplier(weighing: Weighing): void {
       const words = `${name} runs until ${until} but doesn’t apply: the cause is ${causeWords[job.cause]}.`;
       weighing.note('supplier_warranty_not_for_cause', { until, cause: job.cause }, words);
     } else if (!weighing.decided) {
-      const words = `A defective part, and ${name.charAt(0).toLowerCase()}${name.slice(1)} runs until ${until}.`;
+      const words =
+        `A defective part, and ${name.charAt(0).toLowerCase()}${name.slice(1)} runs until ` +
+        `${until}.`;
       weighing.decide('supplier', code, { until }, words);
     }
   }
@@ -51,13 +53,17 @@ function weighFittedPart(weighing: Weighing): void {
   if (!failed) return;
   const { part, job, daysAgo } = failed;
   if (part.source === 'storeroom') {
-    const words = `The ${part.description} fitted with job ${job.ticketNumber} was the store’s own; we don’t warrant it.`;
+    const words =
+      `The ${part.description} fitted with job ${job.ticketNumber} was the store’s own; we ` +
+      'don’t warrant it.';
     weighing.note('own_part_of_store', { ticket: job.ticketNumber }, words);
     return;
   }
   const warranted = partDaysFor(context.rules, part.category ?? line.part?.category ?? null);
   const params = { ticket: job.ticketNumber, days: daysAgo, warranted };
-  const fact = `${partName(failed)} warranted ${days(warranted)}; ours was fitted ${daysEarlier(daysAgo)} with job ${job.ticketNumber}`;
+  const fact =
+    `${partName(failed)} warranted ${days(warranted)}; ours was fitted ${daysEarlier(daysAgo)} ` +
+    `with job ${job.ticketNumber}`;
   if (daysAgo <= warranted) {
     weighing.decide('shop', 'part_in_warranty', params, `${fact}.`);
   } else {
@@ -77,7 +83,9 @@ function weighLabour(weighing: Weighing): void {
   const { job, daysAgo } = repair;
   const warranted = context.rules.labourDays;
   const params = { ticket: job.ticketNumber, days: daysAgo, warranted };
-  const fact = `Labour is warranted ${days(warranted)} from sign-off; job ${job.ticketNumber} was signed off ${daysEarlier(daysAgo)}`;
+  const fact =
+    `Labour is warranted ${days(warranted)} from sign-off; job ${job.ticketNumber} was signed ` +
+    `off ${daysEarlier(daysAgo)}`;
   if (daysAgo <= warranted) {
     weighing.decide('shop', 'labour_in_warranty', params, `${fact}.`);
   } else {
@@ -99,11 +107,15 @@ export function weighCallback(weighing: Weighing): void {
   const { job, daysAgo } = past;
   const params = { ticket: job.ticketNumber, days: daysAgo, window };
   if (job.result === 'unfinished' || job.result === 'made_safe') {
-    const words = `Job ${job.ticketNumber}, ${daysEarlier(daysAgo)}, left the same fault open and said so; this is no callback.`;
+    const words =
+      `Job ${job.ticketNumber}, ${daysEarlier(daysAgo)}, left the same fault open and said so; ` +
+      'this is no callback.';
     weighing.note('callback_left_open', params, words);
     return;
   }
-  const words = `The same fault came back within ${days(window)}: job ${job.ticketNumber} was signed off ${daysEarlier(daysAgo)}.`;
+  const words =
+    `The same fault came back within ${days(window)}: job ${job.ticketNumber} was signed off ` +
+    `${daysEarlier(daysAgo)}.`;
   weighing.decide('shop', 'callback', params, words);
   weighing.askOwner();
 }

@@ -4,7 +4,7 @@ import { partDaysFor } from './history';
 import { bearerWords, capitalised, causeWords, days, daysEarlier } from './phrases';
 import { type Weighing } from './weighing';
 
-/** What the tech says about whose fault it was. A mistake of the shop's own is always the shop's. */
+/** Whose fault it was, by the tech's word. A mistake of the shop's own is always the shop's. */
 export function weighMark(weighing: Weighing): void {
   const { job } = weighing.context;
   const note = job.markNote ? `: ${job.markNote}` : '';
@@ -32,10 +32,14 @@ export function weighCausingJob(weighing: Weighing): void {
   const params = { job: causing.jobId, ticket: causing.ticketNumber, days: ago };
   const what = causing.work ? `${causing.work}, job` : 'job';
   if (causing.machineId === job.machineId) {
-    const words = `It was brought about by an earlier job: ${what} ${causing.ticketNumber}, signed off ${daysEarlier(ago)} on the same machine.`;
+    const words =
+      `It was brought about by an earlier job: ${what} ${causing.ticketNumber}, signed off ` +
+      `${daysEarlier(ago)} on the same machine.`;
     weighing.note('caused_by_job', params, words);
   } else {
-    const words = `It was brought about by an earlier job: ${what} ${causing.ticketNumber}, signed off ${daysEarlier(ago)} on another machine.`;
+    const words =
+      `It was brought about by an earlier job: ${what} ${causing.ticketNumber}, signed off ` +
+      `${daysEarlier(ago)} on another machine.`;
     weighing.note('causing_job_on_other_machine', params, words);
     weighing.askOwner();
   }
@@ -79,7 +83,9 @@ function noteCausingWarranty(weighing: Weighing, causing: CausingJob): void {
   const warranted = isPart ? partDaysFor(context.rules, category) : context.rules.labourDays;
   const name = isPart ? `Parts${category ? ` of class ${category}` : ''} are` : 'Labour is';
   const params = { ticket: causing.ticketNumber, days: ago, warranted };
-  const fact = `${name} warranted ${days(warranted)} from sign-off; job ${causing.ticketNumber} was signed off ${daysEarlier(ago)}`;
+  const fact =
+    `${name} warranted ${days(warranted)} from sign-off; job ${causing.ticketNumber} was ` +
+    `signed off ${daysEarlier(ago)}`;
   if (ago <= warranted) {
     weighing.note(isPart ? 'part_in_warranty' : 'labour_in_warranty', params, `${fact}.`);
   } else {
@@ -97,7 +103,9 @@ function daysSince(causing: CausingJob, on: string): number {
 export function weighNothingFound(weighing: Weighing): void {
   if (weighing.decided || !isNothingFound(weighing)) return;
   const bearer = weighing.context.rules.nothingFoundBearer;
-  const words = `Nothing was found and the machine ran when tested; by our rule ${bearerWords[bearer]} bears that.`;
+  const words =
+    `Nothing was found and the machine ran when tested; by our rule ${bearerWords[bearer]} ` +
+    'bears that.';
   weighing.decide(bearer, 'nothing_found', { bearer }, words);
 }
 

@@ -51,10 +51,13 @@ describe('proposeRuling', () => {
     );
     expect(reasons.map((reason) => reason.words)).toEqual([
       'Imre marked it as our own mistake: hinge fitted crooked.',
-      'It was brought about by an earlier job: hinge fitted, job 0398/2, signed off 12 days earlier on the same machine.',
-      'Parts of class door are warranted 180 days from sign-off; job 0398/2 was signed off 12 days earlier.',
+      'It was brought about by an earlier job: ' +
+        'hinge fitted, job 0398/2, signed off 12 days earlier on the same machine.',
+      'Parts of class door are warranted 180 days from sign-off; ' +
+        'job 0398/2 was signed off 12 days earlier.',
       'It failed through job 0398/2, so it follows that job.',
-      'The maker’s warranty on the machine runs until 2031-12-31 but doesn’t apply: the cause is wear.',
+      'The maker’s warranty on the machine runs until 2031-12-31 ' +
+        'but doesn’t apply: the cause is wear.',
       'Worth $171.00; above $100.00 the owner confirms.',
     ]);
   });
@@ -75,7 +78,8 @@ describe('proposeRuling', () => {
   it('says by how much a warranty is over', () => {
     const { reasons } = proposeRuling(labourLine, sampleCase({}, { earlierJobs: [oldRepair] }));
     expect(reasons[0]?.words).toBe(
-      'Labour is warranted 90 days from sign-off; job 0398/2 was signed off 91 days earlier, 1 day past that.',
+      'Labour is warranted 90 days from sign-off; ' +
+        'job 0398/2 was signed off 91 days earlier, 1 day past that.',
     );
   });
 
