@@ -1,0 +1,5 @@
+export interface Reply {
+  status: number;
+  headers: Record<string, string>;
+  body: string;
+}
