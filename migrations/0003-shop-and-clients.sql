@@ -88,6 +88,7 @@ create table stores (
   -- Which rates apply: the tax place and the trip place of the price book.
   tax_place text not null default '',
   trip_place text not null default '',
+  trip_metres integer check (trip_metres >= 0),
   card_value bigint not null default 0,
   ended_at timestamptz,
   version integer not null default 1,
@@ -130,6 +131,7 @@ create table contacts (
   check (email is not null or not (gets_statements or gets_visits))
 );
 create index contacts_of_client on contacts (shop_id, client_id, name, id);
+create index contacts_by_name on contacts (shop_id, name, id);
 create index contacts_of_store on contacts (shop_id, store_id, name, id);
 select app.versioned('contacts');
 select app.protect('contacts', 'client');
@@ -188,9 +190,12 @@ create table machines (
 );
 create unique index machines_one_a_bay on machines (shop_id, store_id, bay) where state <> 'retired';
 create index machines_of_store on machines (shop_id, store_id, bay, id);
-create index machines_of_bank on machines (shop_id, bank_id);
-create index machines_by_serial on machines (shop_id, serial) where serial <> '';
-create index machines_not_up on machines (shop_id, state, id) where state in ('degraded', 'down', 'locked_out');
+create index machines_of_client on machines (shop_id, client_id, bay, id);
+create index machines_of_bank on machines (shop_id, bank_id, bay_number);
+create index machines_by_bay on machines (shop_id, bay, id);
+create index machines_by_serial on machines (shop_id, serial, id);
+create index machines_by_state on machines (shop_id, state_since desc, id desc);
+create index machines_not_up on machines (shop_id, client_id, store_id) where state in ('degraded', 'down', 'locked_out');
 select app.versioned('machines');
 select app.protect('machines', 'client');
 
@@ -229,6 +234,8 @@ create table attachments (
   content_type text not null,
   bytes bigint not null,
   sha256 text not null,
+  -- A photo made small for lists.
+  small_sha256 text,
   added_by uuid,
   created_at timestamptz not null default now(),
   primary key (shop_id, id),
@@ -252,6 +259,8 @@ create table imports (
   count_bad integer not null default 0,
   problem text,
   by_user_id uuid not null,
+  -- What the check found, as a hash: what is applied must be what the person was shown.
+  plan_sha256 text,
   attempt integer not null default 0,
   lease_until timestamptz,
   version integer not null default 1,
@@ -259,6 +268,7 @@ create table imports (
   updated_at timestamptz not null default now(),
   primary key (shop_id, id)
 );
+create index imports_open on imports (shop_id, id) where state in ('waiting', 'checking', 'applying');
 create index imports_newest on imports (shop_id, created_at desc, id desc);
 select app.versioned('imports');
 select app.protect('imports', 'shop');

@@ -256,7 +256,8 @@ create table ticket_lines (
   bearer text not null check (bearer in ('store', 'shop', 'supplier', 'contract', 'goodwill')),
   list bigint not null,
   charged bigint not null,
-  tax_basis_points integer not null,
+  -- Rates have up to three decimals (8.875 % is 887.5), which a double holds well enough to print.
+  tax_basis_points double precision not null,
   tax bigint not null,
   cost bigint not null,
   reasons jsonb not null default '[]',

@@ -77,7 +77,7 @@ create table fees (
   month text not null,
   words text not null,
   net bigint not null,
-  tax_basis_points integer not null default 0,
+  tax_basis_points double precision not null default 0,
   tax bigint not null default 0,
   total bigint not null,
   natural_key text not null,

@@ -5,6 +5,8 @@ import { problem } from '../problems/problem';
 
 const upload = multer({
   storage: multer.memoryStorage(),
+  // Browsers send file names in UTF-8.
+  defParamCharset: 'utf8',
   limits: { fileSize: 12 * 1024 * 1024, files: 1, fields: 8, parts: 10, fieldSize: 4096 },
 });
 const json = express.json({ limit: '512kb', strict: true, type: 'application/json' });
