@@ -22,14 +22,17 @@ const esmOnly = [
   'ical.js',
 ];
 
+const swc = [
+  '@swc/jest',
+  { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' }, module: { type: 'commonjs' } },
+];
+const angularPreset = createCjsPreset({ tsconfig: '<rootDir>/apps/web/tsconfig.spec.json' });
+
 const node = {
   rootDir: __dirname,
   testEnvironment: 'node',
   transform: {
-    '^.+\\.[cm]?[tj]s$': [
-      '@swc/jest',
-      { jsc: { parser: { syntax: 'typescript' }, target: 'es2022' }, module: { type: 'commonjs' } },
-    ],
+    '^.+\\.[cm]?[tj]s$': swc,
   },
   transformIgnorePatterns: [`/node_modules/(?!(${esmOnly.join('|')})/)`],
   moduleNameMapper: aliases,
@@ -38,11 +41,16 @@ const node = {
 module.exports = {
   projects: [
     {
-      ...createCjsPreset({ tsconfig: '<rootDir>/apps/web/tsconfig.spec.json' }),
+      ...angularPreset,
       displayName: 'web',
       rootDir: __dirname,
       testMatch: ['<rootDir>/apps/web/src/**/*.spec.ts', '<rootDir>/libs/ui/src/**/*.spec.ts'],
       setupFilesAfterEnv: ['<rootDir>/apps/web/jest-setup.ts'],
+      transform: {
+        [`/node_modules/(${esmOnly.join('|')})/.+\\.js$`]: swc,
+        ...angularPreset.transform,
+      },
+      transformIgnorePatterns: [`/node_modules/(?!(.*\\.mjs$|(${esmOnly.join('|')})/))`],
       moduleNameMapper: aliases,
     },
     {

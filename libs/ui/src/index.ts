@@ -6,6 +6,7 @@ export { FieldError, errorText } from './choices/field-error';
 export { EmptyNote } from './notes/empty-note';
 export { type FloorBank, type FloorBay, type FloorChoice } from './floor/floor-bay';
 export { FloorPlan } from './floor/floor-plan';
+export { FormNotes } from './notes/form-notes';
 export { ListShell } from './list/list-shell';
 export {
   type ListAsk,
@@ -16,7 +17,7 @@ export {
 } from './list/list-state';
 export { MachineGlyph } from './machine-glyph/machine-glyph';
 export { MoneyText } from './format/money-text';
-export { amountFrom, currencySign, minorDigits, moneyText } from './format/money';
+export { amountField, amountFrom, currencySign, moneyText } from './format/money';
 export { PageHead } from './head/page-head';
 export { ProblemNote } from './notes/problem-note';
 export { problemText } from './notes/problem-text';

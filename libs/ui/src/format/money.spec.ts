@@ -1,10 +1,11 @@
-import { amountFrom, currencySign, minorDigits, moneyText } from './money';
+import { amountField, amountFrom, currencySign, moneyText } from './money';
 
 describe('money text', () => {
   it('writes minor units with the decimals of the currency', () => {
     expect(moneyText(14820, 'USD', 'en-US')).toBe('$148.20');
     expect(moneyText(14820, 'JPY', 'en-US')).toBe('¥14,820');
     expect(moneyText(14820, 'KWD', 'en-US', true)).toBe('14.820');
+    expect(moneyText(14820, 'HUF', 'en-US', true)).toBe('148.20');
     expect(moneyText(-5, 'USD', 'en-US')).toBe('-$0.05');
     expect(moneyText(123456, 'EUR', 'de-DE', true)).toBe('1.234,56');
   });
@@ -15,7 +16,6 @@ describe('money text', () => {
 
   it('gives the sign for a column head', () => {
     expect(currencySign('GBP', 'en-GB')).toBe('£');
-    expect(minorDigits('EUR')).toBe(2);
   });
 
   it.each([
@@ -30,5 +30,10 @@ describe('money text', () => {
     ['twelve', undefined],
   ])('reads "%s" as %s', (text, amount) => {
     expect(amountFrom(text, 'USD')).toBe(amount);
+  });
+
+  it('gives back what was typed', () => {
+    expect(amountField(1250, 'USD')).toBe('12.50');
+    expect(amountField(null, 'USD')).toBe('');
   });
 });

@@ -1,12 +1,13 @@
+import { amountFromDecimal, decimalFromAmount, formatMoney, minorDigits } from '@lib/domain';
+
 const formats = new Map<string, Intl.NumberFormat>();
 
-function formatFor(locale: string, currency: string, bare: boolean): Intl.NumberFormat {
-  const key = `${locale} ${currency} ${bare}`;
+function bareFormat(locale: string, currency: string): Intl.NumberFormat {
+  const key = `${locale} ${currency}`;
   let format = formats.get(key);
   if (!format) {
     const digits = minorDigits(currency);
     format = new Intl.NumberFormat(locale, {
-      ...(bare ? {} : { style: 'currency', currency, currencyDisplay: 'narrowSymbol' }),
       minimumFractionDigits: digits,
       maximumFractionDigits: digits,
     });
@@ -15,27 +16,21 @@ function formatFor(locale: string, currency: string, bare: boolean): Intl.Number
   return format;
 }
 
-/** How many decimals a currency's minor unit has: 2 for most, 0 for yen, 3 for dinars. */
-export function minorDigits(currency: string): number {
-  return (
-    new Intl.NumberFormat('en', { style: 'currency', currency }).resolvedOptions()
-      .maximumFractionDigits ?? 2
-  );
-}
-
 /** An amount in minor units as people of `locale` write it; `bare` leaves the currency out. */
 export function moneyText(amount: number, currency: string, locale: string, bare = false): string {
-  const digits = minorDigits(currency);
-  // Written as a decimal string, so that no binary fraction is ever made of an amount.
-  const whole = Math.trunc(Math.abs(amount) / 10 ** digits);
-  const rest = String(Math.abs(amount) % 10 ** digits).padStart(digits, '0');
-  const decimal = `${amount < 0 ? '-' : ''}${whole}${digits ? `.${rest}` : ''}`;
-  return formatFor(locale, currency, bare).format(decimal as Intl.StringNumericLiteral);
+  if (!bare) return formatMoney(amount, currency, locale);
+  // Formatted from decimal text, so that no binary fraction is ever made of an amount.
+  const decimal = decimalFromAmount(amount, currency) as Intl.StringNumericLiteral;
+  return bareFormat(locale, currency).format(decimal);
 }
 
 /** The currency's sign for the head of a column: "$". */
 export function currencySign(currency: string, locale: string): string {
-  const parts = formatFor(locale, currency, false).formatToParts(0);
+  const parts = new Intl.NumberFormat(locale, {
+    style: 'currency',
+    currency,
+    currencyDisplay: 'narrowSymbol',
+  }).formatToParts(0);
   return parts.find((part) => part.type === 'currency')?.value ?? currency;
 }
 
@@ -44,10 +39,17 @@ export function currencySign(currency: string, locale: string): string {
  * comma as the decimal sign, and no thousands signs, because "1.234" would be two different sums.
  */
 export function amountFrom(text: string, currency: string): number | undefined {
-  const digits = minorDigits(currency);
-  const match = /^\s*(\d{1,10})(?:[.,](\d+))?\s*$/.exec(text);
-  if (!match) return undefined;
-  const fraction = match[2] ?? '';
-  if (fraction.length > digits) return undefined;
-  return Number(match[1] + fraction.padEnd(digits, '0'));
+  const plain = text.trim().replace(',', '.');
+  if (!/^\d{1,10}(\.\d+)?$/.test(plain)) return undefined;
+  try {
+    return amountFromDecimal(plain, currency);
+  } catch {
+    // More decimals than the currency has.
+    return undefined;
+  }
+}
+
+/** An amount as it stands in an input field: "12.50". */
+export function amountField(amount: number | null | undefined, currency: string): string {
+  return amount == null ? '' : decimalFromAmount(amount, currency);
 }

@@ -3,6 +3,7 @@ import { TestBed } from '@angular/core/testing';
 import { BearerLabel } from './bearer-label';
 import { Callout } from './callout';
 import { EmptyNote } from './empty-note';
+import { FormNotes } from './form-notes';
 import { ProblemNote } from './problem-note';
 import { problemText } from './problem-text';
 import { ProgressLine } from './progress-line';
@@ -38,6 +39,14 @@ describe('notes', () => {
   it('an empty note says what will appear', async () => {
     const { host } = await shown(EmptyNote, { text: 'Calls appear here.' });
     expect(host.textContent).toContain('Calls appear here.');
+  });
+
+  it('form notes are an alert before there is one to read out', async () => {
+    const { fixture, host } = await shown(FormNotes, { notes: [] });
+    expect(host.querySelector('[role=alert]')?.textContent?.trim()).toBe('');
+    fixture.componentRef.setInput('notes', ['Bank A is full.']);
+    await fixture.whenStable();
+    expect(host.querySelector('[role=alert] p')?.textContent).toBe('Bank A is full.');
   });
 
   it('a callout carries its tone', async () => {

@@ -1,0 +1,21 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { AreaFrame } from '../core/frame/area-frame';
+import { type NavItem } from '../core/frame/nav-item';
+import { areas } from '../core/navigation/areas';
+
+@Component({
+  selector: 'tw-client-frame',
+  imports: [AreaFrame],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `<tw-area-frame [area]="area" [items]="items" />`,
+})
+export class ClientFrame {
+  protected readonly area = areas.client;
+  protected readonly items: readonly NavItem[] = [
+    { label: 'Home', link: '/client/home' },
+    { label: 'Machines', link: '/client/machines', needs: 'machines.read' },
+    { label: 'Visits', link: '/client/visits', needs: 'visits.read' },
+    { label: 'Statements', link: '/client/statements', needs: 'statements.read' },
+    { label: 'Account', link: '/account' },
+  ];
+}

@@ -1,0 +1,98 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  ElementRef,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
+import { Router, RouterLink } from '@angular/router';
+import { wordFor } from '@lib/ui';
+import { problemText } from '@lib/ui';
+import { Confirm } from '../confirm/confirm';
+import { Messages } from '../messages/messages';
+import { LocalKeepings } from '../session/leaving';
+import { Session } from '../session/session';
+import { SchemeToggle } from '../scheme/scheme-toggle';
+
+/** Who is signed in, as whom else they could go on, their account, the scheme, and the way out. */
+@Component({
+  selector: 'tw-account-menu',
+  imports: [RouterLink, SchemeToggle],
+  templateUrl: './account-menu.html',
+  styleUrl: './account-menu.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  host: {
+    '(keydown.escape)': 'close(true)',
+    '(document:click)': 'closeFromOutside($event)',
+    '(focusout)': 'closeWhenLeft($event)',
+  },
+})
+export class AccountMenu {
+  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
+  readonly #router = inject(Router);
+  readonly #confirm = inject(Confirm);
+  readonly #keepings = inject(LocalKeepings);
+  readonly #messages = inject(Messages);
+  protected readonly openerElement = viewChild.required<ElementRef<HTMLButtonElement>>('opener');
+  protected readonly session = inject(Session);
+  protected readonly open = signal(false);
+
+  protected readonly others = computed(() => {
+    const current = this.session.membership()?.id;
+    return this.session
+      .memberships()
+      .filter(({ id }) => id !== current)
+      .map((one) => ({
+        id: one.id,
+        text: `${one.clientName ?? one.shopName ?? 'Tumblewright'}, ${wordFor(one.role)}`,
+      }));
+  });
+
+  protected close(refocus = false): void {
+    if (!this.open()) return;
+    this.open.set(false);
+    if (refocus) this.openerElement().nativeElement.focus();
+  }
+
+  protected closeFromOutside(event: Event): void {
+    if (!this.#host.nativeElement.contains(event.target as Node)) this.close();
+  }
+
+  protected closeWhenLeft(event: FocusEvent): void {
+    const to = event.relatedTarget as Node | null;
+    if (to && !this.#host.nativeElement.contains(to)) this.close();
+  }
+
+  protected async goOnAs(membershipId: string): Promise<void> {
+    this.close();
+    try {
+      await this.session.switchTo(membershipId);
+      await this.#router.navigateByUrl('/', { onSameUrlNavigation: 'reload' });
+    } catch (error) {
+      this.#messages.say(problemText(error));
+    }
+  }
+
+  protected async signOut(): Promise<void> {
+    this.close();
+    const losses = await this.#keepings.losses();
+    const agreed =
+      losses.length === 0 ||
+      (await this.#confirm.ask({
+        heading: 'Sign out on this device?',
+        consequence: losses.join(' '),
+        action: 'Sign out and lose it',
+        stay: 'Stay signed in',
+        destructive: true,
+      }));
+    if (!agreed) return;
+    try {
+      await this.session.signOut();
+      await this.#router.navigateByUrl('/sign-in');
+    } catch {
+      this.#messages.say('You are still signed in: there was no answer. Try again when connected.');
+    }
+  }
+}

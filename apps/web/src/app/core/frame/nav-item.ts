@@ -1,0 +1,8 @@
+import { type Permission } from '@lib/contracts/web';
+
+export interface NavItem {
+  readonly label: string;
+  readonly link: string;
+  /** Shown only to whose role holds it. */
+  readonly needs?: Permission;
+}

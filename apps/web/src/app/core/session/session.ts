@@ -1,0 +1,140 @@
+import { HttpContext } from '@angular/common/http';
+import { computed, effect, inject, Injectable, signal } from '@angular/core';
+import { type BodyOf, type Permission } from '@lib/contracts/web';
+import { Reading } from '@lib/ui';
+import { firstValueFrom } from 'rxjs';
+import { Api } from '../api/api';
+import { isProblem } from '../api/problem';
+import { LocalKeepings } from './leaving';
+import { oneAtATime } from './one-at-a-time';
+import { type SessionAnswer, type Snapshot, snapshots } from './snapshot';
+import { tabs } from './tabs';
+import { withoutSession } from './without-session';
+
+const bare = () => new HttpContext().set(withoutSession, true);
+
+/**
+ * Who is signed in, as which membership, and what that allows. The access token lives in memory
+ * only; a refresh token that scripts cannot see lives in a cookie.
+ */
+@Injectable({ providedIn: 'root' })
+export class Session {
+  readonly #api = inject(Api);
+  readonly #keepings = inject(LocalKeepings);
+  readonly #reading = inject(Reading);
+  readonly #now = signal<Snapshot | undefined>(undefined);
+  #token: string | undefined;
+  #started: Promise<void> | undefined;
+  #renewing: Promise<string | undefined> | undefined;
+
+  readonly person = computed(() => this.#now()?.person);
+  readonly membership = computed(() => this.#now()?.membership ?? undefined);
+  readonly memberships = computed(() => this.#now()?.memberships ?? []);
+  readonly shop = computed(() => this.#now()?.shop ?? undefined);
+  readonly role = computed(() => this.membership()?.role);
+  readonly signedIn = computed(() => this.#now() !== undefined);
+  readonly permissions = computed<ReadonlySet<Permission>>(
+    () => new Set(this.#now()?.permissions ?? []),
+  );
+  /** Counts the sessions that ended without the person asking for it. */
+  readonly ended = signal(0);
+
+  constructor() {
+    effect(() => {
+      const shop = this.shop();
+      this.#reading.locale.set(shop?.locale ?? navigator.language);
+      this.#reading.currency.set(shop?.currency ?? 'USD');
+      this.#reading.zone.set(shop?.zone ?? Intl.DateTimeFormat().resolvedOptions().timeZone);
+    });
+    tabs.onMessage((message) => {
+      if (message === 'changed') location.reload();
+      if (message === 'signed-out') this.#end();
+    });
+  }
+
+  /** Picks up the session of an earlier visit, once; guards wait for it. */
+  start(): Promise<void> {
+    return (this.#started ??= this.#pickUp());
+  }
+
+  may(permission: Permission): boolean {
+    return this.permissions().has(permission);
+  }
+
+  token(): string | undefined {
+    return this.#token;
+  }
+
+  async signIn(body: BodyOf<'session.signIn'>): Promise<void> {
+    this.take(await firstValueFrom(this.#api.callWith(bare(), 'session.signIn', { body })));
+    tabs.tell('changed');
+  }
+
+  /** Goes on with an answer that carries a session: after sign-in or an accepted invitation. */
+  take(answer: SessionAnswer): void {
+    this.#token = answer.accessToken;
+    this.#now.set(snapshots.keep(answer));
+    this.#started = Promise.resolve();
+  }
+
+  async switchTo(membershipId: string): Promise<void> {
+    this.take(await firstValueFrom(this.#api.call('session.switch', { body: { membershipId } })));
+    tabs.tell('changed');
+  }
+
+  /** A token that works, in place of `stale`; undefined when the session has ended. */
+  async renew(stale: string | undefined): Promise<string | undefined> {
+    if (this.#token !== stale) return this.#token;
+    this.#renewing ??= oneAtATime('tw.session', () => this.#refresh()).finally(
+      () => (this.#renewing = undefined),
+    );
+    return this.#renewing;
+  }
+
+  async signOut(everywhere = false): Promise<void> {
+    if (everywhere) await firstValueFrom(this.#api.call('session.signOutEverywhere'));
+    else await firstValueFrom(this.#api.callWith(bare(), 'session.signOut'));
+    await this.#keepings.wipe();
+    this.#forget();
+    tabs.tell('signed-out');
+  }
+
+  /** After the person's own name changed. */
+  rename(name: string): void {
+    this.#now.update((now) => now && { ...now, person: { ...now.person, name } });
+  }
+
+  async #pickUp(): Promise<void> {
+    const kept = snapshots.read();
+    if (!kept) return;
+    this.#now.set(kept);
+    try {
+      await this.renew(undefined);
+    } catch {
+      // No answer: go on with what was kept. The first call that is answered settles it.
+    }
+  }
+
+  async #refresh(): Promise<string | undefined> {
+    try {
+      this.take(await firstValueFrom(this.#api.callWith(bare(), 'session.refresh')));
+      return this.#token;
+    } catch (error) {
+      if (isProblem(error) && error.unanswered) throw error;
+      this.#end();
+      return undefined;
+    }
+  }
+
+  #end(): void {
+    if (!this.signedIn()) return;
+    this.#forget();
+    this.ended.update((n) => n + 1);
+  }
+
+  #forget(): void {
+    this.#token = undefined;
+    this.#now.set(undefined);
+    snapshots.forget();
+  }
+}

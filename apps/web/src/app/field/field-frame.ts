@@ -1,0 +1,22 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { AreaFrame } from '../core/frame/area-frame';
+import { type NavItem } from '../core/frame/nav-item';
+import { areas } from '../core/navigation/areas';
+
+@Component({
+  selector: 'tw-field-frame',
+  imports: [AreaFrame],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `
+    <tw-area-frame [area]="area" [items]="items" [thumb]="true" [offlineText]="offline" />
+  `,
+})
+export class FieldFrame {
+  protected readonly area = areas.field;
+  protected readonly offline =
+    'No signal. What you record is kept here and sent when there is one.';
+  protected readonly items: readonly NavItem[] = [
+    { label: 'Day', link: '/field/day' },
+    { label: 'Account', link: '/account' },
+  ];
+}

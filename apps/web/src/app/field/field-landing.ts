@@ -1,0 +1,14 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { EmptyNote, PageHead } from '@lib/ui';
+
+/** Holds the place until the area's own first page is built. */
+@Component({
+  selector: 'tw-field-landing',
+  imports: [EmptyNote, PageHead],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `
+    <tw-page-head heading="Day" />
+    <tw-empty text="Your visits of the day will stand here. This page is not built yet." />
+  `,
+})
+export class FieldLanding {}

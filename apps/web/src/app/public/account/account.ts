@@ -1,0 +1,56 @@
+import { ChangeDetectionStrategy, Component, inject, signal, viewChild } from '@angular/core';
+import { type AnswerOf } from '@lib/contracts/web';
+import { PageHead, ProblemNote } from '@lib/ui';
+import { Api } from '../../core/api/api';
+import { type Problem } from '../../core/api/problem';
+import { type HasChanges, warnBeforeUnload } from '../../core/forms/unsaved-changes';
+import { Devices } from './devices';
+import { NameForm } from './name-form';
+import { OneTimeCodes } from './one-time-codes';
+import { PasswordForm } from './password-form';
+
+@Component({
+  selector: 'tw-account',
+  imports: [Devices, NameForm, OneTimeCodes, PageHead, PasswordForm, ProblemNote],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `
+    <tw-page-head heading="Your account" [sub]="account()?.email" />
+    @if (account(); as shown) {
+      <div class="tw-pair">
+        <tw-name-form class="tw-sheet" [account]="shown" (changed)="load()" />
+        <tw-password-form class="tw-sheet" [email]="shown.email" />
+        <tw-one-time-codes class="tw-sheet" [inForce]="shown.oneTimeCodes" (changed)="load()" />
+        <tw-devices class="tw-sheet" />
+      </div>
+    } @else if (problem(); as failure) {
+      <tw-problem [problem]="failure" (retry)="load()" />
+    } @else {
+      <p role="status">Loading your account.</p>
+    }
+  `,
+})
+export class Account implements HasChanges {
+  readonly #api = inject(Api);
+  protected readonly nameForm = viewChild(NameForm);
+  protected readonly passwordForm = viewChild(PasswordForm);
+
+  protected readonly account = signal<AnswerOf<'account.show'> | undefined>(undefined);
+  protected readonly problem = signal<Problem | undefined>(undefined);
+
+  constructor() {
+    this.load();
+    warnBeforeUnload(() => this.hasChanges());
+  }
+
+  hasChanges(): boolean {
+    return (this.nameForm()?.form.dirty ?? false) || (this.passwordForm()?.form.dirty ?? false);
+  }
+
+  protected load(): void {
+    this.problem.set(undefined);
+    this.#api.call('account.show').subscribe({
+      next: (account) => this.account.set(account),
+      error: (problem: Problem) => this.problem.set(problem),
+    });
+  }
+}

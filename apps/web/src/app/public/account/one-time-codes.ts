@@ -1,0 +1,111 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  output,
+  signal,
+} from '@angular/core';
+import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
+import { MatButton } from '@angular/material/button';
+import { MatError, MatFormField, MatLabel } from '@angular/material/form-field';
+import { MatInput } from '@angular/material/input';
+import { type AnswerOf } from '@lib/contracts/web';
+import { FieldError, FormNotes } from '@lib/ui';
+import { Api } from '../../core/api/api';
+import { type Problem } from '../../core/api/problem';
+import { rulesFor } from '../../core/forms/rules-for';
+import { submission } from '../../core/forms/submission';
+import { Messages } from '../../core/messages/messages';
+
+/** A second proof at sign-in: codes from an authenticator (RFC 6238). */
+@Component({
+  selector: 'tw-one-time-codes',
+  imports: [
+    FieldError,
+    FormNotes,
+    MatButton,
+    MatError,
+    MatFormField,
+    MatInput,
+    MatLabel,
+    ReactiveFormsModule,
+  ],
+  templateUrl: './one-time-codes.html',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  styles: `
+    img {
+      display: block;
+      inline-size: 12rem;
+      block-size: 12rem;
+      margin-block-end: 0.5rem;
+      background: #fff;
+    }
+    code {
+      overflow-wrap: anywhere;
+    }
+  `,
+})
+export class OneTimeCodes {
+  readonly #api = inject(Api);
+  readonly #messages = inject(Messages);
+
+  readonly inForce = input.required<boolean>();
+  readonly changed = output<void>();
+
+  protected readonly begun = signal<AnswerOf<'account.startTotp'> | undefined>(undefined);
+  protected readonly removing = signal(false);
+  protected readonly notes = signal<readonly string[]>([]);
+  protected readonly picture = computed(
+    () => `data:image/svg+xml,${encodeURIComponent(this.begun()?.qrSvg ?? '')}`,
+  );
+
+  protected readonly form = inject(NonNullableFormBuilder).group({
+    code: ['', [Validators.required, ...rulesFor('account.confirmTotp', 'code')]],
+  });
+
+  protected readonly confirming = submission(
+    this.form,
+    () => this.#api.call('account.confirmTotp', { body: this.form.getRawValue() }),
+    {
+      done: () => this.#settle('From now on, signing in asks for a one-time code.'),
+      refused: (problem) => this.#refused(problem),
+    },
+  );
+
+  protected readonly stopping = submission(
+    this.form,
+    () => this.#api.call('account.removeTotp', { body: this.form.getRawValue() }),
+    {
+      done: () => this.#settle('Signing in no longer asks for a one-time code.'),
+      refused: (problem) => this.#refused(problem),
+    },
+  );
+
+  protected begin(): void {
+    this.notes.set([]);
+    this.#api.call('account.startTotp').subscribe({
+      next: (begun) => this.begun.set(begun),
+      error: (problem: Problem) => this.notes.set([problem.message]),
+    });
+  }
+
+  protected leave(): void {
+    this.begun.set(undefined);
+    this.removing.set(false);
+    this.form.reset();
+  }
+
+  #settle(said: string): void {
+    this.leave();
+    this.#messages.say(said);
+    this.changed.emit();
+  }
+
+  #refused(problem: Problem): boolean {
+    if (problem.kind !== 'sign-in-refused') return false;
+    this.form.controls.code.setErrors({ server: 'This code does not fit. Try the next one.' });
+    return true;
+  }
+}
