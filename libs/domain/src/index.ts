@@ -66,3 +66,6 @@ export * from './recurrence/validate-rule';
 export * from './cautions/cautions';
 export * from './csv/formula-cell';
 export * from './contrast/contrast';
+export * from './signin/password-verdict';
+export * from './subscription/plan-limits';
+export * from './subscription/subscription-state';
