@@ -251,8 +251,11 @@ create table ticket_lines (
   line_key text not null,
   kind text not null,
   description text not null,
+  -- Labour is priced by the hour and counted in minutes, parts each: what quantity_milli counts.
+  unit text not null default 'each' check (unit in ('each', 'minute')),
   quantity_milli bigint not null,
   unit_price bigint not null,
+  discount bigint not null default 0,
   bearer text not null check (bearer in ('store', 'shop', 'supplier', 'contract', 'goodwill')),
   list bigint not null,
   charged bigint not null,

@@ -9,6 +9,8 @@ pg.types.setTypeParser(pg.types.builtins.INT8, (text) => {
   if (!Number.isSafeInteger(value)) throw new RangeError(`${text} is past the safe integer range`);
   return value;
 });
+// Tax rates with fractions and a machine's amperes: exact as numbers at the few digits they have.
+pg.types.setTypeParser(pg.types.builtins.NUMERIC, Number);
 // A trade day has no time and no zone: it stays the text it is.
 pg.types.setTypeParser(pg.types.builtins.DATE, (text) => text);
 
