@@ -295,20 +295,48 @@ create index payments_asked on payments (shop_id, created_at) where state = 'ask
 select app.versioned('payments');
 select app.protect('payments', 'client');
 
+-- Money given back, by the shop or after a dispute at the card payment service.
+create table refunds (
+  shop_id uuid not null references shops (id),
+  id uuid not null,
+  client_id uuid not null,
+  store_id uuid not null,
+  payment_id uuid not null,
+  amount bigint not null check (amount > 0),
+  refunded_on date not null,
+  words text not null default '',
+  -- The refund or dispute at the card payment service, so that its repeated word is one refund.
+  card_refund text,
+  at timestamptz not null default now(),
+  primary key (shop_id, id),
+  unique (shop_id, card_refund),
+  foreign key (shop_id, client_id) references clients (shop_id, id),
+  foreign key (shop_id, store_id) references stores (shop_id, id),
+  foreign key (shop_id, payment_id) references payments (shop_id, id)
+);
+create index refunds_of_payment on refunds (shop_id, payment_id);
+create index refunds_of_store on refunds (shop_id, store_id, refunded_on);
+select app.protect('refunds', 'client');
+select app.append_only('refunds');
+
+-- What a payment settled; a refund takes back with a row below zero.
 create table allocations (
   shop_id uuid not null references shops (id),
   id uuid not null,
   client_id uuid not null,
   payment_id uuid not null,
   statement_id uuid not null,
-  amount bigint not null check (amount > 0),
+  refund_id uuid,
+  amount bigint not null,
   at timestamptz not null default now(),
   primary key (shop_id, id),
-  unique (shop_id, payment_id, statement_id),
   foreign key (shop_id, client_id) references clients (shop_id, id),
   foreign key (shop_id, payment_id) references payments (shop_id, id),
-  foreign key (shop_id, statement_id) references statements (shop_id, id)
+  foreign key (shop_id, statement_id) references statements (shop_id, id),
+  foreign key (shop_id, refund_id) references refunds (shop_id, id),
+  check (case when refund_id is null then amount > 0 else amount < 0 end)
 );
 create index allocations_of_statement on allocations (shop_id, statement_id);
+create index allocations_of_payment on allocations (shop_id, payment_id);
 select app.protect('allocations', 'client');
 select app.append_only('allocations');

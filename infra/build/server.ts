@@ -11,7 +11,7 @@ const entries: Record<string, string> = {
   worker: 'server/src/worker.ts',
   migrate: 'server/src/migrate.ts',
   demo: 'server/src/demo/seed.ts',
-  'pdf-worker': 'server/src/core/documents/pdf-worker.ts',
+  'pdf-worker': 'server/src/pdf-worker.ts',
 };
 
 const sources = [

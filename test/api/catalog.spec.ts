@@ -28,6 +28,7 @@ const appendOnly = [
   'entries',
   'fees',
   'platform_audit',
+  'refunds',
   'rulings',
   'statement_documents',
   'statements',
