@@ -30,8 +30,8 @@ export async function run(driver, needs = {}) {
     if (needs.postgres) await ensurePostgres();
     if (needs.chromium) await ensureChromium();
     const require = createRequire(import.meta.url);
-    const tsx = require('tsx/cjs/api');
-    const { main } = tsx.require(path.join(root, 'infra', `${driver}.ts`), import.meta.url);
+    require('tsx/cjs/api').register();
+    const { main } = require(path.join(root, 'infra', `${driver}.ts`));
     await main(process.argv.slice(2));
   } catch (error) {
     reportAndExit(error);

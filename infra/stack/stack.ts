@@ -55,29 +55,36 @@ export class Stack {
   }
 
   async start(): Promise<void> {
+    await this.startWithoutServices();
+    await this.options.progress.step('Starting the web process and the worker', () =>
+      Promise.all([this.web.start(), this.worker.start()]),
+    );
+    this.writeRunFile();
+  }
+
+  /** Database and fakes, migrated and filled; the environment in which server programs then run. */
+  async startWithoutServices(): Promise<Record<string, string>> {
     const { progress } = this.options;
     mkdirSync(this.dataDir, { recursive: true });
     const ports = await this.choosePorts();
     await progress.step('Starting the database', () => this.startDatabase());
     await this.startFakes(ports);
-    this.describeServices(ports);
+    const env = this.environment(ports);
+    this.describeServices(ports, env);
     await progress.step('Bringing the database to the current schema', () =>
-      migrate(this.environment(ports), this.aborter.signal),
+      migrate(env, this.aborter.signal),
     );
     if (this.options.demo) {
       await fillDemo({
         dataDir: this.dataDir,
         urls: this.urls,
-        env: this.environment(ports),
+        env,
         progress,
         signal: this.aborter.signal,
         recreate: this.cluster && (() => this.recreateDatabase()),
       });
     }
-    await progress.step('Starting the web process and the worker', () =>
-      Promise.all([this.web.start(), this.worker.start()]),
-    );
-    this.writeRunFile();
+    return env;
   }
 
   /** Ends everything in order; may be called at any moment, also while starting. */
@@ -181,13 +188,13 @@ export class Stack {
       this.stripe = await startStripeFake({
         port: ports.stripe,
         dataFile: path.join(this.dataDir, 'stripe.jsonl'),
-        webhookUrl: `http://127.0.0.1:${ports.web}/api/stripe/webhook`,
+        webhookUrl: `http://127.0.0.1:${ports.web}/api/webhooks/stripe`,
         webhookSecret: localSecrets(this.dataDir).stripeWebhookSecret,
       });
     }
   }
 
-  environment(ports: Record<PortName, number>): Record<string, string> {
+  private environment(ports: Record<PortName, number>): Record<string, string> {
     const secrets = localSecrets(this.dataDir);
     const passedOn = ['HOST', 'LOG_LEVEL', 'MAIL_FROM', 'TRUST_PROXY', 'TZ', 'HOME'];
     const fromOutside = passedOn
@@ -220,8 +227,9 @@ export class Stack {
     };
   }
 
-  private describeServices(ports: Record<PortName, number>): void {
-    const { DATABASE_OWNER_URL: _, ...env } = this.environment(ports);
+  private describeServices(ports: Record<PortName, number>, all: Record<string, string>): void {
+    // The owner's address is for migrating; what serves requests must not have it.
+    const { DATABASE_OWNER_URL: _, ...env } = all;
     this.webUrl = `http://127.0.0.1:${ports.web}`;
     this.workerUrl = `http://127.0.0.1:${ports.worker}`;
     const service = (name: 'web' | 'worker', file: string, url: string): Service =>

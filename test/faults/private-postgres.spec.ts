@@ -2,9 +2,14 @@ import { mkdtempSync, rmSync, statSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { createServer } from 'node:net';
-import { isAlive } from '../process/alive';
-import { removeCluster, startCluster } from './cluster';
-import { databaseUrls, ensureDatabase, ensureRoles, withClient } from './databases';
+import { isAlive } from '../../infra/process/alive';
+import { removeCluster, startCluster } from '../../infra/postgres/cluster';
+import {
+  databaseUrls,
+  ensureDatabase,
+  ensureRoles,
+  withClient,
+} from '../../infra/postgres/databases';
 
 // A mkdtemp folder is private to us: as root this is the case of a checkout in a closed home.
 const home = mkdtempSync(path.join(tmpdir(), 'tw cluster, "quoted" '));

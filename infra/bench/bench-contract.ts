@@ -1,0 +1,20 @@
+import { type Stack } from '../stack/stack';
+
+/** What a bench in test/bench is given. */
+export interface BenchContext {
+  stack: Stack;
+  /** The arguments after its name, `--json FILE` taken out. */
+  args: readonly string[];
+  say(text: string): void;
+}
+
+/** What it hands back: rows for people and for the JSON file, and whether its targets were met. */
+export interface BenchResult {
+  rows: Record<string, string | number>[];
+  met: boolean;
+  /** Whatever else should be in the JSON file. */
+  details?: unknown;
+}
+
+/** A file `test/bench/<name>.bench.ts` exports this as `bench`. */
+export type Bench = (context: BenchContext) => Promise<BenchResult>;
