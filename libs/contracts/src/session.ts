@@ -92,6 +92,13 @@ export const sessionOperations = defineOperations({
     permission: 'signed-in',
     answer: z.object({ items: z.array(device) }),
   },
+  'session.end': {
+    method: 'DELETE',
+    path: '/api/sessions/:sessionId',
+    summary: 'Sign out on one device',
+    permission: 'signed-in',
+    params: z.strictObject({ sessionId: id }),
+  },
   'session.signOutEverywhere': {
     method: 'DELETE',
     path: '/api/sessions',
@@ -146,33 +153,6 @@ export const accountOperations = defineOperations({
     body: z.strictObject({ token, password }),
     problems: ['not-found', 'too-many-requests'],
   },
-  'invitations.look': {
-    method: 'GET',
-    path: '/api/invitations/:token',
-    summary: 'What an invitation is for',
-    permission: 'public',
-    params: z.strictObject({ token }),
-    answer: z.object({
-      shopName: z.string(),
-      role: z.enum(roles),
-      clientName: z.string().nullable(),
-      email: z.string(),
-      name: z.string(),
-      /** Whether a person with this address can sign in already; only the holder of the mail sees it. */
-      known: z.boolean(),
-    }),
-  },
-  'invitations.accept': {
-    method: 'POST',
-    path: '/api/invitations/:token/accept',
-    summary: 'Accept an invitation',
-    permission: 'public',
-    params: z.strictObject({ token }),
-    body: z.strictObject({ name: line(120).optional(), password: password.optional() }),
-    answer: session,
-    status: 200,
-    problems: ['not-found', 'conflict'],
-  },
   'account.show': {
     method: 'GET',
     path: '/api/account',
@@ -184,6 +164,8 @@ export const accountOperations = defineOperations({
       email: z.string(),
       emailVerified: z.boolean(),
       oneTimeCodes: z.boolean(),
+      /** Whether this person may use one-time codes: shop owners and platform admins. */
+      oneTimeCodesOffered: z.boolean(),
       version: z.int(),
     }),
   },
@@ -212,7 +194,7 @@ export const accountOperations = defineOperations({
     permission: 'signed-in',
     idempotency: 'natural',
     answer: z.object({ secret: z.string(), uri: z.string(), qrSvg: z.string() }),
-    problems: ['conflict'],
+    problems: ['conflict', 'not-allowed'],
   },
   'account.confirmTotp': {
     method: 'POST',
