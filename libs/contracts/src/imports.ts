@@ -68,7 +68,7 @@ export const importOperations = defineOperations({
     path: '/api/imports',
     summary: 'Imports, the newest first',
     permission: 'imports.run',
-    query: listQuery({ sort: ['createdAt'] }),
+    query: listQuery({ sort: ['-createdAt'] }),
     answer: listOf(importSummary),
   },
   'imports.show': {

@@ -123,10 +123,10 @@ export const machineOperations = defineOperations({
   'machines.list': {
     method: 'GET',
     path: '/api/machines',
-    summary: 'Machines by bay, serial number or how long they are in their state',
+    summary: 'Machines by bay, by serial number, or by what changed its state last',
     permission: 'machines.read',
     query: listQuery({
-      sort: ['bay', 'serial', 'stateSince'],
+      sort: ['bay', 'serial', '-stateSince'],
       filters: {
         clientId: id.optional(),
         storeId: id.optional(),
