@@ -152,6 +152,8 @@ create table invitations (
   accepted_at timestamptz,
   withdrawn_at timestamptz,
   invited_by uuid not null,
+  -- How often it was mailed: each time is a mail of its own.
+  mailed integer not null default 1,
   created_at timestamptz not null default now(),
   primary key (shop_id, id)
 );
@@ -163,6 +165,7 @@ create index invitations_newest on invitations (shop_id, created_at desc, id);
 create table sessions (
   id uuid primary key,
   user_id uuid not null references users (id),
+  -- What the person works as on this device; without one a platform admin is in the platform area.
   shop_id uuid,
   membership_id uuid,
   device text not null,
@@ -172,7 +175,7 @@ create table sessions (
   ended_at timestamptz,
   ended_because text
 );
-create index sessions_of_user on sessions (user_id) where ended_at is null;
+create index sessions_of_user on sessions (user_id, last_used_at desc);
 grant select, insert, update on sessions to tw_platform;
 
 create table refresh_tokens (
@@ -188,13 +191,33 @@ create table mailed_tokens (
   token_hash text primary key,
   id uuid not null unique,
   user_id uuid not null references users (id),
-  purpose text not null check (purpose in ('verify_email', 'reset_password')),
+  purpose text not null check (purpose in ('reset_password')),
   expires_at timestamptz not null,
   used_at timestamptz,
   created_at timestamptz not null default now()
 );
 create index mailed_tokens_of_user on mailed_tokens (user_id);
 grant select, insert, update on mailed_tokens to tw_platform;
+
+-- A shop somebody asked to open. Nothing of it exists until the address is confirmed, so nobody can
+-- take an address that is not theirs, and a sign-up looks the same whether the address is known.
+create table sign_ups (
+  id uuid primary key,
+  token_hash text not null unique,
+  email text not null,
+  name text not null,
+  password_hash text not null,
+  shop_name text not null,
+  zone text not null,
+  currency text not null,
+  locale text not null,
+  expires_at timestamptz not null,
+  confirmed_at timestamptz,
+  opened_shop_id uuid,
+  created_at timestamptz not null default now()
+);
+create index sign_ups_oldest on sign_ups (expires_at);
+grant select, insert, update, delete on sign_ups to tw_platform;
 
 -- Failed sign-ins, counted per address and source together, so that guessing from one place never
 -- locks out the person at another (docs/decisions/0005-sign-in.md). Addresses are kept as hashes.
@@ -290,6 +313,8 @@ create table platform_mails (
 create index platform_mails_due on platform_mails (next_attempt_at) where state in ('waiting', 'handing_over');
 create index platform_mails_newest on platform_mails (created_at desc, id desc);
 grant select, insert, update on platform_mails to tw_platform;
+-- An invitation and its mail are written together by the shop, which can add a mail and read none.
+grant insert on platform_mails to tw_app;
 
 create table idempotency_keys (
   shop_id uuid not null references shops (id),

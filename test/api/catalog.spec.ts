@@ -120,6 +120,7 @@ describe('the schema keeps tenants apart', () => {
       'shop_usage',
       'shops',
       'sign_in_failures',
+      'sign_ups',
       'stripe_events',
       'subscription_events',
       'subscriptions',

@@ -26,8 +26,8 @@ export const usage = z.object({
   kind: z.enum(['stores', 'machines', 'crew']),
   used: z.int(),
   limit: z.int(),
-  level: z.enum(['fine', 'near', 'at', 'over']),
-  /** In plain words; empty while fine. */
+  level: z.enum(['within', 'near', 'at']),
+  /** In plain words, to be shown as they are. */
   words: z.string(),
 });
 
