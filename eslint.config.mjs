@@ -54,6 +54,27 @@ export default tseslint.config(
     rules: { '@angular-eslint/template/prefer-control-flow': 'error' },
   },
   {
+    // What loads before an area: a barrel would pull everything any area uses of it into that first
+    // load, because chunks are split along files that are reachable, not along names that are used.
+    files: [
+      'apps/web/src/app/{core,public}/**/*.ts',
+      'apps/web/src/app/*.ts',
+      'libs/ui/src/**/*.ts',
+    ],
+    rules: {
+      '@typescript-eslint/no-restricted-imports': [
+        'error',
+        {
+          paths: ['@lib/ui', '@lib/domain', '@lib/contracts/web'].map((name) => ({
+            name,
+            allowTypeImports: true,
+            message: `Import from the file itself here: ${name.replace('/web', '')}/...`,
+          })),
+        },
+      ],
+    },
+  },
+  {
     files: ['libs/domain/src/**/*.ts'],
     rules: {
       // Pure computation: no clock, no randomness, no environment (architecture decision 0002).

@@ -6,6 +6,7 @@ const aliases = {
   '^@lib/contracts/web$': '<rootDir>/libs/contracts/src/web.ts',
   '^@lib/contracts$': '<rootDir>/libs/contracts/src/index.ts',
   '^@lib/ui$': '<rootDir>/libs/ui/src/index.ts',
+  '^@lib/(contracts|domain|ui)/(.+)$': '<rootDir>/libs/$1/src/$2',
 };
 
 // These packages ship ES modules only; Jest runs CommonJS, so they are compiled like our own code.

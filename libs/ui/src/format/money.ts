@@ -1,4 +1,5 @@
-import { amountFromDecimal, decimalFromAmount, formatMoney, minorDigits } from '@lib/domain';
+import { amountFromDecimal, decimalFromAmount, formatMoney } from '@lib/domain/money/amount';
+import { minorDigits } from '@lib/domain/money/currency';
 
 const formats = new Map<string, Intl.NumberFormat>();
 

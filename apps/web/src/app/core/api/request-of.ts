@@ -1,12 +1,6 @@
 import { HttpHeaders, HttpParams } from '@angular/common/http';
-import {
-  type BodyOf,
-  type OperationId,
-  type ParamsOf,
-  type QueryOf,
-  type Route,
-  routes,
-} from '@lib/contracts/web';
+import { type Route, routes } from '@lib/contracts/generated/routes';
+import { type BodyOf, type OperationId, type ParamsOf, type QueryOf } from '@lib/contracts/web';
 import { v7 } from 'uuid';
 
 type Part<K extends string, V> = [V] extends [never]

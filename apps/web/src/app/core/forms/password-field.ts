@@ -3,7 +3,7 @@ import { type FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MatError, MatFormField, MatHint, MatLabel, MatSuffix } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-import { FieldError } from '@lib/ui';
+import { FieldError } from '@lib/ui/choices/field-error';
 
 /** A password that can be looked at while it is typed (NIST SP 800-63B, 5.1.1.2). */
 @Component({

@@ -1,5 +1,6 @@
 import { type ValidatorFn, Validators } from '@angular/forms';
-import { type BodyOf, type FieldRule, formRules, type OperationId } from '@lib/contracts/web';
+import { type FieldRule, formRules } from '@lib/contracts/generated/form-rules';
+import { type BodyOf, type OperationId } from '@lib/contracts/web';
 
 type FieldOf<Id extends OperationId> = keyof BodyOf<Id> & string;
 

@@ -8,8 +8,8 @@ import {
   viewChild,
 } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
-import { wordFor } from '@lib/ui';
-import { problemText } from '@lib/ui';
+import { wordFor } from '@lib/ui/words/words';
+import { problemText } from '@lib/ui/notes/problem-text';
 import { Confirm } from '../confirm/confirm';
 import { Messages } from '../messages/messages';
 import { LocalKeepings } from '../session/leaving';

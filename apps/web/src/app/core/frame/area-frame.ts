@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
-import { StatusLine } from '@lib/ui';
+import { StatusLine } from '@lib/ui/notes/status-line';
 import { filter } from 'rxjs';
 import { type Area } from '../navigation/areas';
 import { Messages } from '../messages/messages';

@@ -1,5 +1,5 @@
 import { type Role } from '@lib/contracts/web';
-import { type Copy } from '@lib/ui';
+import { type Copy } from '@lib/ui/tokens/tokens';
 
 export interface Area {
   readonly name: string;

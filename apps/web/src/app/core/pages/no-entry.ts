@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { wordFor } from '@lib/ui';
+import { wordFor } from '@lib/ui/words/words';
 import { Session } from '../session/session';
 import { PlainPage } from './plain-page';
 

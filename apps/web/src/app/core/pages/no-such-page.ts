@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { EmptyNote, PageHead } from '@lib/ui';
+import { PageHead } from '@lib/ui/head/page-head';
+import { EmptyNote } from '@lib/ui/notes/empty-note';
 
 /** As the not-found page, inside an area's frame. */
 @Component({

@@ -1,7 +1,7 @@
 import { HttpContext } from '@angular/common/http';
 import { computed, effect, inject, Injectable, signal } from '@angular/core';
 import { type BodyOf, type Permission } from '@lib/contracts/web';
-import { Reading } from '@lib/ui';
+import { Reading } from '@lib/ui/format/reading';
 import { firstValueFrom } from 'rxjs';
 import { Api } from '../api/api';
 import { isProblem } from '../api/problem';

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, signal, viewChild } from '@angular/core';
 import { type AnswerOf } from '@lib/contracts/web';
-import { PageHead, ProblemNote } from '@lib/ui';
+import { PageHead } from '@lib/ui/head/page-head';
+import { ProblemNote } from '@lib/ui/notes/problem-note';
 import { Api } from '../../core/api/api';
 import { type Problem } from '../../core/api/problem';
 import { type HasChanges, warnBeforeUnload } from '../../core/forms/unsaved-changes';

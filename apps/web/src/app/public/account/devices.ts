@@ -2,7 +2,9 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { MatButton } from '@angular/material/button';
 import { Router } from '@angular/router';
 import { type AnswerOf } from '@lib/contracts/web';
-import { counted, InstantPipe, ProblemNote } from '@lib/ui';
+import { InstantPipe } from '@lib/ui/format/time-pipes';
+import { ProblemNote } from '@lib/ui/notes/problem-note';
+import { counted } from '@lib/ui/words/words';
 import { Api } from '../../core/api/api';
 import { type Problem, problemFrom } from '../../core/api/problem';
 import { Confirm } from '../../core/confirm/confirm';

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { FormNotes } from '@lib/ui';
+import { FormNotes } from '@lib/ui/notes/form-notes';
 import { Api } from '../../core/api/api';
 import { PasswordField } from '../../core/forms/password-field';
 import { rulesFor } from '../../core/forms/rules-for';

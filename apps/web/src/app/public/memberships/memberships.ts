@@ -1,7 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router } from '@angular/router';
-import { FormNotes, labelFor, TicketCard } from '@lib/ui';
+import { FormNotes } from '@lib/ui/notes/form-notes';
+import { TicketCard } from '@lib/ui/ticket/ticket-card';
+import { labelFor } from '@lib/ui/words/words';
 import { areaOf } from '../../core/navigation/areas';
 import { isProblem } from '../../core/api/problem';
 import { PlainPage } from '../../core/pages/plain-page';

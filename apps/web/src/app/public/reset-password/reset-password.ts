@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { FormNotes } from '@lib/ui';
+import { FormNotes } from '@lib/ui/notes/form-notes';
 import { Api } from '../../core/api/api';
 import { PasswordField } from '../../core/forms/password-field';
 import { rulesFor } from '../../core/forms/rules-for';

@@ -1,5 +1,3 @@
-import { isTimeZone } from '@lib/domain';
-
 /** Currencies of the places most people sign up from; anyone else picks from the list. */
 const currencyOfRegion: Readonly<Record<string, string>> = {
   AU: 'AUD',
@@ -32,9 +30,17 @@ export function guessesFrom(language: string, zone: string | undefined): Guesses
   const currency = euroRegions.includes(region ?? '') ? 'EUR' : currencyOfRegion[region ?? ''];
   return {
     locale: region && /^[A-Z]{2}$/.test(region) ? `${tongue}-${region}` : 'en-US',
-    zone: zone && isTimeZone(zone) ? zone : 'UTC',
+    zone: zone && isZone(zone) ? zone : 'UTC',
     currency: currency ?? 'USD',
   };
+}
+
+function isZone(zone: string): boolean {
+  try {
+    return !!new Intl.DateTimeFormat('en', { timeZone: zone });
+  } catch {
+    return false;
+  }
 }
 
 /** Every zone the browser knows, with the guessed one even if it is an older name. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { ProblemNote } from '@lib/ui';
+import { ProblemNote } from '@lib/ui/notes/problem-note';
 import { Api } from '../../core/api/api';
 import { isProblem, type Problem } from '../../core/api/problem';
 import { mailedToken } from '../../core/navigation/mailed-token';
