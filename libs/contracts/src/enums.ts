@@ -32,6 +32,41 @@ export const jobResult = z.enum([
   'nothing_found',
   'replaced',
 ]);
+/** What is reported of a machine before anybody has looked; `other` needs words. */
+export const symptom = z.enum([
+  'wont_start',
+  'wont_fill',
+  'wont_drain',
+  'wont_heat',
+  'wont_turn',
+  'wont_spin',
+  'wont_lock',
+  'wont_open',
+  'stops_midway',
+  'leaks',
+  'noisy',
+  'smells',
+  'takes_no_payment',
+  'shows_error',
+  'damaged',
+  'other',
+]);
+/** In which way the part failed that was found to have failed. */
+export const findingCode = z.enum([
+  'blocked',
+  'broken',
+  'burnt',
+  'worn',
+  'loose',
+  'leaking',
+  'seized',
+  'shorted',
+  'misaligned',
+  'soiled',
+  'missing',
+  'misadjusted',
+  'other',
+]);
 export const lineKind = z.enum(['trip', 'labour', 'access', 'part', 'fee', 'late_charge']);
 export const warrantyMark = z.enum(['none', 'shop_warranty', 'own_mistake']);
 export const partSource = z.enum(['shelf', 'van', 'storeroom', 'ordered', 'salvaged']);
@@ -48,6 +83,8 @@ export type CallState = z.infer<typeof callState>;
 export type Bearer = z.infer<typeof bearer>;
 export type Cause = z.infer<typeof cause>;
 export type JobResult = z.infer<typeof jobResult>;
+export type Symptom = z.infer<typeof symptom>;
+export type FindingCode = z.infer<typeof findingCode>;
 export type LineKind = z.infer<typeof lineKind>;
 export type WarrantyMark = z.infer<typeof warrantyMark>;
 export type PartSource = z.infer<typeof partSource>;

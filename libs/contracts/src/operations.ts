@@ -1,3 +1,5 @@
+import { actOperations } from './acts';
+import { callOperations } from './calls';
 import { clientOperations } from './clients';
 import { conditionOperations } from './conditions';
 import { contactOperations } from './contacts';
@@ -7,6 +9,7 @@ import { exportOperations } from './exports';
 import { fileOperations } from './files';
 import { importOperations } from './imports';
 import { invitationOperations } from './invitations';
+import { jobOperations } from './jobs';
 import { ledgerOperations } from './ledger';
 import { liveOperations } from './live';
 import { bankOperations, machineOperations } from './machines';
@@ -17,10 +20,13 @@ import { paymentOperations } from './payments';
 import { platformOperations } from './platform';
 import { priceOperations } from './prices';
 import { receivableOperations } from './receivables';
+import { rulingOperations } from './rulings';
 import { accountOperations, sessionOperations } from './session';
 import { settingsOperations } from './settings';
 import { statementOperations } from './statements';
 import { storeOperations } from './stores';
+import { ticketOperations } from './tickets';
+import { visitOperations } from './visits';
 import { subscriptionOperations } from './subscription';
 
 /** Everything the API can do: the server answers exactly these, the document lists exactly these. */
@@ -43,6 +49,12 @@ export const operations = {
   ...fileOperations,
   ...importOperations,
   ...exportOperations,
+  ...callOperations,
+  ...visitOperations,
+  ...jobOperations,
+  ...actOperations,
+  ...rulingOperations,
+  ...ticketOperations,
   ...liveOperations,
   ...contractOperations,
   ...monthCloseOperations,
