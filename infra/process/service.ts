@@ -127,9 +127,10 @@ export class Service {
 
   private failure(what: string): Advice {
     const log = existsSync(this.logFile) ? readFileSync(this.logFile, 'utf8') : '';
-    const end = log.trimEnd().split('\n').slice(-15).join('\n');
+    const lines = log.trimEnd().split('\n').slice(-15);
+    const end = lines.map((line) => (line.length > 400 ? `${line.slice(0, 400)} ...` : line));
     return new Advice(
-      `The ${this.options.name} process ${what}. Its log ends with:\n${end}`,
+      `The ${this.options.name} process ${what}. Its log ends with:\n${end.join('\n')}`,
       `The whole log: ${this.logFile}`,
     );
   }

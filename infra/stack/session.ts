@@ -1,9 +1,21 @@
 import { mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
-import { reportAndExit } from '../bootstrap/progress.cjs';
+import { Advice, progress, reportAndExit } from '../bootstrap/progress.cjs';
 import { writeState } from '../process/state-file';
 import { endLeftOvers, lockPath, refuseSecondStart } from './run-file';
 import { type Stack } from './stack';
+
+function claim(dataDir: string, lock: string): void {
+  try {
+    mkdirSync(dataDir, { recursive: true });
+    writeState(lock, { pid: process.pid });
+  } catch (error) {
+    throw new Advice(
+      `The data folder ${dataDir} cannot be written: ${(error as Error).message}`,
+      'Start as the user it belongs to, or set DATA_DIR to a folder of your own.',
+    );
+  }
+}
 
 interface Stoppable {
   stop(): Promise<void>;
@@ -20,9 +32,8 @@ export async function runAtKeyboard(
 ): Promise<void> {
   const { dataDir } = stack.options;
   refuseSecondStart(dataDir);
-  mkdirSync(dataDir, { recursive: true });
   const lock = lockPath(dataDir);
-  writeState(lock, { pid: process.pid });
+  claim(dataDir, lock);
 
   let stopping = false;
   const stop = async (code: number): Promise<void> => {
@@ -30,15 +41,15 @@ export async function runAtKeyboard(
     await Promise.all(others.map((other) => other.stop()));
     await stack.stop();
     rmSync(lock, { force: true });
-    process.exitCode = code;
-    process.exit();
+    progress.say('Stopped.');
+    process.exit(code);
   };
   const onSignal = (): void => {
     if (stopping) {
       stack.forceStop();
       process.exit(130);
     }
-    process.stdout.write('\nStopping (Ctrl-C again to force) ...\n');
+    progress.say('\nStopping (Ctrl-C again to force) ...');
     stop(0).then(undefined, reportAndExit);
   };
   for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(name, onSignal);

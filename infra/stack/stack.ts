@@ -46,6 +46,7 @@ export class Stack {
   web!: Service;
   worker!: Service;
   private stopping = false;
+  private databaseStart: Promise<void> | undefined;
   private readonly aborter = new AbortController();
 
   constructor(readonly options: StackOptions) {}
@@ -69,6 +70,7 @@ export class Stack {
     const ports = await this.choosePorts();
     await progress.step('Starting the database', () => this.startDatabase());
     await this.startFakes(ports);
+    this.goOnOrLeave();
     const env = this.environment(ports);
     this.describeServices(ports, env);
     await progress.step('Bringing the database to the current schema', () =>
@@ -87,10 +89,15 @@ export class Stack {
     return env;
   }
 
+  private goOnOrLeave(): void {
+    if (this.stopping) throw new Error('Stopped while starting.');
+  }
+
   /** Ends everything in order; may be called at any moment, also while starting. */
   async stop(): Promise<void> {
     this.stopping = true;
     this.aborter.abort();
+    await this.databaseStart?.catch(() => undefined);
     await Promise.all([this.web?.stop(), this.worker?.stop()]);
     await Promise.all([this.mailbox?.close(), this.stripe?.close()]);
     await this.cluster?.stop();
@@ -152,9 +159,12 @@ export class Stack {
       return;
     }
     const folder = path.join(this.dataDir, 'postgres');
-    const { cluster, urls } = await startPrivateDatabase(folder, this.options.durable);
-    this.urls = urls;
-    this.watchDatabase(cluster, folder);
+    this.databaseStart = startPrivateDatabase(folder, this.options.durable).then((started) => {
+      this.urls = started.urls;
+      this.watchDatabase(started.cluster, folder);
+    });
+    await this.databaseStart;
+    this.goOnOrLeave();
   }
 
   private async recreateDatabase(): Promise<void> {
