@@ -13,6 +13,7 @@ create table calls (
   reported_via text not null check (reported_via in ('office', 'tech', 'client', 'sticker')),
   state text not null default 'open' check (state in ('open', 'planned', 'closed', 'withdrawn')),
   visit_id uuid,
+  planned_at timestamptz,
   closed_at timestamptz,
   version integer not null default 1,
   created_at timestamptz not null default now(),
@@ -44,8 +45,10 @@ create table visits (
   state text not null default 'planned' check (state in ('planned', 'confirmed', 'in_process', 'completed', 'cancelled')),
   reason text not null default '',
   round_id uuid,
+  confirmed_at timestamptz,
   arrived_at timestamptz,
   left_at timestamptz,
+  completed_at timestamptz,
   received_by text,
   ticket_id uuid,
   version integer not null default 1,
@@ -127,7 +130,10 @@ create table jobs (
   test_amount bigint not null default 0,
   warranty_mark text not null default 'none' check (warranty_mark in ('none', 'shop_warranty', 'own_mistake')),
   mark_words text not null default '',
+  marked_by text not null default '',
   caused_by_job_id uuid,
+  -- Whose minutes they are: what an hour costs the shop goes by the person.
+  membership_id uuid,
   done_at timestamptz,
   version integer not null default 1,
   created_at timestamptz not null default now(),
@@ -139,7 +145,8 @@ create table jobs (
   foreign key (shop_id, visit_id) references visits (shop_id, id),
   foreign key (shop_id, machine_id) references machines (shop_id, id),
   foreign key (shop_id, call_id) references calls (shop_id, id),
-  foreign key (shop_id, caused_by_job_id) references jobs (shop_id, id)
+  foreign key (shop_id, caused_by_job_id) references jobs (shop_id, id),
+  foreign key (shop_id, membership_id) references memberships (shop_id, id)
 );
 create index jobs_of_machine on jobs (shop_id, machine_id, created_at desc, id desc);
 create index jobs_of_client on jobs (shop_id, client_id, created_at desc, id desc);
@@ -196,6 +203,10 @@ create table rulings (
   bearer text not null check (bearer in ('store', 'shop', 'supplier', 'contract', 'goodwill')),
   reasons jsonb not null default '[]',
   needs_confirmation boolean not null default false,
+  list bigint not null default 0,
+  cost bigint not null default 0,
+  -- What the proposal rests on, folded: a decision holds only while a fresh proposal has the same.
+  basis text not null default '',
   why text not null default '',
   by_user_id uuid,
   at timestamptz not null default now(),
@@ -263,7 +274,10 @@ create table ticket_lines (
   tax_basis_points double precision not null,
   tax bigint not null,
   cost bigint not null,
+  price_reasons jsonb not null default '[]',
   reasons jsonb not null default '[]',
+  -- By whom and why, where the owner decided.
+  decision jsonb,
   primary key (shop_id, id),
   unique (shop_id, ticket_id, position),
   foreign key (shop_id, client_id) references clients (shop_id, id),

@@ -96,7 +96,8 @@ select app.append_only('fees');
 create table entries (
   shop_id uuid not null references shops (id),
   id uuid not null,
-  document_kind text not null check (document_kind in ('ticket', 'fee', 'late_charge', 'statement', 'payment', 'refund', 'credit_note', 'write_off')),
+  document_kind text not null check (document_kind in
+    ('ticket', 'absorbed', 'fee', 'late_charge', 'statement', 'payment', 'refund', 'credit_note', 'write_off')),
   document_id uuid not null,
   line_no integer not null,
   account text not null,

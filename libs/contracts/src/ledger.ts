@@ -22,6 +22,7 @@ export const accountCode = z.enum([
 
 export const documentKind = z.enum([
   'ticket',
+  'absorbed',
   'fee',
   'late_charge',
   'statement',

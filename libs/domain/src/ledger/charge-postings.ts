@@ -38,25 +38,31 @@ export interface TicketForPosting extends ChargedDocument {
 }
 
 /**
- * What a signed-off ticket posts: the store's lines and their tax to `unbilled`; the own cost of
- * what the shop bore (its mistakes and goodwill) to the absorbed accounts. Lines a contract or a
- * supplier bears post nothing here: the one is paid by the contract's fee, the other is claimed.
+ * What a signed-off ticket posts: the store's lines and their tax to `unbilled`. Lines a contract or
+ * a supplier bears post nothing: the one is paid by the contract's fee, the other is claimed. What
+ * the shop bore is a document of its own (`absorbedPostings`).
  *
  * @throws RangeError when a line that the store does not bear charges it all the same
  */
 export function ticketPostings(ticket: TicketForPosting): Posting[] {
-  const { storeId } = ticket;
-  const absorbed = ticket.lines.flatMap((line): Posting[] => {
-    if (line.bearer !== 'store' && line.charged !== 0) {
-      throw new RangeError(`A line borne by ${line.bearer} must charge the store nothing`);
+  for (const { bearer, charged } of ticket.lines) {
+    if (bearer !== 'store' && charged !== 0) {
+      throw new RangeError(`A line borne by ${bearer} must charge the store nothing`);
     }
-    if (line.bearer !== 'shop' && line.bearer !== 'goodwill') return [];
-    return [
-      { account: 'absorbed_cost', storeId, amount: minor(line.ownCost) },
-      { account: 'absorbed_offset', storeId, amount: negated(line.ownCost) },
-    ];
-  });
-  return gathered([...chargePostings(ticket, 'unbilled'), ...absorbed]);
+  }
+  return gathered(chargePostings(ticket, 'unbilled'));
+}
+
+/** The own cost of what the shop bore of a ticket: its mistakes, its warranty and goodwill. */
+export function absorbedPostings(ticket: Pick<TicketForPosting, 'storeId' | 'lines'>): Posting[] {
+  const { storeId } = ticket;
+  const absorbed = ticket.lines
+    .filter(({ bearer }) => bearer === 'shop' || bearer === 'goodwill')
+    .flatMap(({ ownCost }): Posting[] => [
+      { account: 'absorbed_cost', storeId, amount: minor(ownCost) },
+      { account: 'absorbed_offset', storeId, amount: negated(ownCost) },
+    ]);
+  return gathered(absorbed);
 }
 
 /** A contract's fee for a period: it waits in `unbilled` for the month's statement. */

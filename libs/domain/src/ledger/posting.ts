@@ -10,6 +10,8 @@ export interface Posting {
 
 export type DocumentKind =
   | 'ticket'
+  /** The own cost of what the shop bore of a ticket, by the ticket's id. */
+  | 'absorbed'
   | 'fee'
   | 'late_charge'
   | 'statement'
