@@ -182,7 +182,10 @@ create table refresh_tokens (
   token_hash text primary key,
   session_id uuid not null references sessions (id) on delete cascade,
   created_at timestamptz not null default now(),
-  used_at timestamptz
+  used_at timestamptz,
+  -- The hash of the key the browser made for this trade: with it, and only with it, a browser whose
+  -- answer got lost may ask again.
+  asked_with text
 );
 create index refresh_tokens_of_session on refresh_tokens (session_id);
 grant select, insert, update, delete on refresh_tokens to tw_platform;
