@@ -16,6 +16,7 @@ export {
   listState,
 } from './list/list-state';
 export { MachineGlyph } from './machine-glyph/machine-glyph';
+export { StateMark } from './machine-glyph/state-mark';
 export { MoneyText } from './format/money-text';
 export { amountField, amountFrom, currencySign, moneyText } from './format/money';
 export { PageHead } from './head/page-head';
@@ -37,3 +38,13 @@ export {
   type SchemePair,
 } from './tokens/tokens';
 export { counted, labelFor, LabelPipe, wordFor, WordPipe } from './words/words';
+export { AmountField } from './fields/amount-field';
+export { AmountInput } from './fields/amount-input';
+export { CheckField } from './fields/check-field';
+export { DistanceField } from './fields/distance-field';
+export { NumberField } from './fields/number-field';
+export { PercentField } from './fields/percent-field';
+export { SelectField } from './fields/select-field';
+export { TextField } from './fields/text-field';
+export { WordsField } from './fields/words-field';
+export { distanceText, distanceUnit, percentText } from './fields/measures';

@@ -1,4 +1,10 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import {
+  booleanAttribute,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+} from '@angular/core';
 import { type MachineKind, type MachineState } from '@lib/contracts/web';
 import { labelFor, wordFor } from '../words/words';
 
@@ -74,7 +80,7 @@ export class MachineGlyph {
   readonly kind = input.required<MachineKind>();
   readonly state = input.required<MachineState>();
   /** Say `decorative` where words beside the drawing tell kind and state already. */
-  readonly decorative = input(false);
+  readonly decorative = input(false, { transform: booleanAttribute });
 
   protected readonly mark = computed(() => marks[this.kind()]);
   protected readonly text = computed(() => `${labelFor(this.kind())}, ${wordFor(this.state())}`);
