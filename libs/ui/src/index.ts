@@ -17,6 +17,7 @@ export {
 } from './list/list-state';
 export { MachineGlyph } from './machine-glyph/machine-glyph';
 export { StateMark } from './machine-glyph/state-mark';
+export { LoadNote, type Loadable } from './notes/load-note';
 export { MoneyText } from './format/money-text';
 export { amountField, amountFrom, currencySign, moneyText } from './format/money';
 export { PageHead } from './head/page-head';
