@@ -61,6 +61,11 @@ export class Session {
     return this.permissions().has(permission);
   }
 
+  /** As `may`, for what changes something: not while the shop is paused. */
+  mayChange(permission: Permission): boolean {
+    return this.may(permission) && (this.shop()?.mayWrite ?? true);
+  }
+
   token(): string | undefined {
     return this.#token;
   }
