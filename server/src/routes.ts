@@ -1,4 +1,9 @@
 import { type Route } from './core/http/route';
+import { accountRoutes } from './features/account/account.router';
+import { crewRoutes } from './features/crew/crew.router';
+import { invitationsRoutes } from './features/invitations/invitations.router';
+import { sessionRoutes } from './features/session/session.router';
+import { signUpRoutes } from './features/sign-up/sign-up.router';
 import { clientsRoutes } from './features/clients/clients.router';
 import { contactsRoutes } from './features/contacts/contacts.router';
 import { liveRoutes } from './features/live/live.router';
@@ -10,6 +15,11 @@ import { storesRoutes } from './features/stores/stores.router';
 
 /** Every route of the API, a line a feature. */
 export const routes: Route[] = [
+  ...accountRoutes,
+  ...crewRoutes,
+  ...invitationsRoutes,
+  ...sessionRoutes,
+  ...signUpRoutes,
   ...clientsRoutes,
   ...contactsRoutes,
   ...liveRoutes,

@@ -112,6 +112,6 @@ export const invitationOperations = defineOperations({
     body: z.strictObject({ name: line(120).optional(), password: password.optional() }),
     answer: session,
     status: 200,
-    problems: ['not-found', 'not-signed-in', 'conflict', 'plan-limit'],
+    problems: ['not-found', 'not-signed-in', 'conflict', 'plan-limit', 'shop-paused'],
   },
 });

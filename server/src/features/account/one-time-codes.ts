@@ -1,0 +1,73 @@
+import QRCode from 'qrcode';
+import { type SignedInContext } from '../../core/context';
+import { platformRow, platformRows } from '../../core/database/tenancy';
+import { type AnswerOf } from '../../core/http/route';
+import { found, problem } from '../../core/problems/problem';
+import { newCodeSecret, takeCode } from '../session/one-time-code';
+import { type Person, personById } from '../session/people';
+import { countTry, forgetTries, tryKey } from '../session/sign-in-failures';
+
+/** Shop owners and platform admins: whose password opens most. */
+export async function mayUseCodes(person: Pick<Person, 'id' | 'platform_admin'>): Promise<boolean> {
+  if (person.platform_admin) return true;
+  const owner = await platformRow(
+    `select 1 from memberships where user_id = $userId and role = 'shop_owner' and ended_at is null
+     limit 1`,
+    { userId: person.id },
+  );
+  return owner !== undefined;
+}
+
+/** A fresh secret, not yet in force: a code made from it must be shown first. */
+export async function startCodes(context: SignedInContext): Promise<AnswerOf<'account.startTotp'>> {
+  const person = found(await personById(context.userId));
+  if (!(await mayUseCodes(person))) {
+    throw problem('not-allowed', 'One-time codes are for shop owners and platform admins.');
+  }
+  const { secret, uri, sealed } = newCodeSecret(person.email);
+  const started = await platformRows(
+    `update users set totp_secret = $sealed, totp_last_step = null
+     where id = $id and totp_confirmed_at is null returning id`,
+    { id: person.id, sealed },
+  );
+  if (!started.length) throw inForce();
+  return { secret, uri, qrSvg: await QRCode.toString(uri, { type: 'svg', margin: 4 }) };
+}
+
+export async function confirmCodes(context: SignedInContext, code: string): Promise<void> {
+  const person = found(await personById(context.userId));
+  if (person.totp_confirmed_at) throw inForce();
+  if (!person.totp_secret) throw problem('conflict', 'Begin with a fresh secret first.');
+  await demandRightCode(context, person, code);
+  await platformRows('update users set totp_confirmed_at = $now where id = $id', {
+    id: person.id,
+    now: context.now,
+  });
+}
+
+export async function removeCodes(context: SignedInContext, code: string): Promise<void> {
+  const person = found(await personById(context.userId));
+  if (!person.totp_confirmed_at) throw problem('conflict', 'One-time codes are not in force.');
+  await demandRightCode(context, person, code);
+  await platformRows(
+    'update users set totp_secret = null, totp_confirmed_at = null where id = $id',
+    { id: person.id },
+  );
+}
+
+async function demandRightCode(
+  context: SignedInContext,
+  person: Person,
+  code: string,
+): Promise<void> {
+  const key = tryKey(person.email, context.sessionId, undefined);
+  const heard = await countTry(key, context.now);
+  if (!heard || !(await takeCode(person, code, context.now))) {
+    throw problem('sign-in-refused', 'The code is not right, or was used before.');
+  }
+  await forgetTries(key);
+}
+
+function inForce() {
+  return problem('conflict', 'One-time codes are in force already: remove them first.');
+}
