@@ -6,6 +6,7 @@ import { sessionRoutes } from './features/session/session.router';
 import { signUpRoutes } from './features/sign-up/sign-up.router';
 import { clientsRoutes } from './features/clients/clients.router';
 import { contactsRoutes } from './features/contacts/contacts.router';
+import { filesRoutes } from './features/files/files.router';
 import { liveRoutes } from './features/live/live.router';
 import { machinesRoutes } from './features/machines/machines.router';
 import { partsRoutes } from './features/parts/parts.router';
@@ -22,6 +23,7 @@ export const routes: Route[] = [
   ...signUpRoutes,
   ...clientsRoutes,
   ...contactsRoutes,
+  ...filesRoutes,
   ...liveRoutes,
   ...machinesRoutes,
   ...partsRoutes,

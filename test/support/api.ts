@@ -28,7 +28,10 @@ export function api(app: Express, token?: string) {
       if (token) sent = sent.set('Authorization', `Bearer ${token}`);
       if (ask.version !== undefined) sent = sent.set('If-Match', `"${ask.version}"`);
       if (storesAnswer(operation)) sent = sent.set('Idempotency-Key', ask.key ?? uuid());
-      if (ask.file) return sent.attach('file', ask.file.content, ask.file.name);
+      if (ask.file) {
+        for (const [name, value] of Object.entries(ask.body ?? {})) sent = sent.field(name, value);
+        return sent.attach('file', ask.file.content, ask.file.name);
+      }
       return ask.body === undefined ? sent : sent.send(ask.body as object);
     },
   };
