@@ -17,6 +17,7 @@ import {
   withInMemoryScrolling,
   withNavigationErrorHandler,
 } from '@angular/router';
+import { MAT_FORM_FIELD_DEFAULT_OPTIONS } from '@angular/material/form-field';
 import { provideServiceWorker } from '@angular/service-worker';
 import { routes } from './app.routes';
 import { NewVersion } from './core/messages/new-version';
@@ -39,6 +40,11 @@ export const appConfig: ApplicationConfig = {
         return new RedirectCommand(page, { skipLocationChange: true });
       }),
     ),
+    {
+      // A form marks what may be left out, in its label, rather than everything that may not.
+      provide: MAT_FORM_FIELD_DEFAULT_OPTIONS,
+      useValue: { appearance: 'outline', hideRequiredMarker: true, subscriptSizing: 'dynamic' },
+    },
     { provide: TitleStrategy, useExisting: Titles },
     provideServiceWorker('ngsw-worker.js', {
       enabled: !isDevMode(),

@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import {
+  booleanAttribute,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+} from '@angular/core';
 import { moneyText } from './money';
 import { Reading } from './reading';
 
@@ -26,9 +33,9 @@ export class MoneyText {
   readonly amount = input.required<number>();
   /** Default: the currency of the shop the person works with. */
   readonly currency = input<string>();
-  readonly bare = input(false);
+  readonly bare = input(false, { transform: booleanAttribute });
   /** For the list value of a line that is not charged. */
-  readonly struck = input(false);
+  readonly struck = input(false, { transform: booleanAttribute });
 
   protected readonly text = computed(() =>
     moneyText(

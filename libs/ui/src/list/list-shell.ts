@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  booleanAttribute,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  output,
+} from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
@@ -30,11 +37,11 @@ export class ListShell {
   readonly list = input.required<ListControls>();
   readonly searchLabel = input('Search');
   /** False for a list that cannot be searched. */
-  readonly searchable = input(true);
+  readonly searchable = input(true, { transform: booleanAttribute });
   /** What will appear here, said when there is nothing yet. */
   readonly empty = input.required<string>();
   /** Offers the list as CSV; the page does the export when asked. */
-  readonly csv = input(false);
+  readonly csv = input(false, { transform: booleanAttribute });
   readonly csvAsked = output<void>();
 
   protected readonly sortId = `tw-list-sort-${shells++}`;

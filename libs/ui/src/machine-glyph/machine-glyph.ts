@@ -84,6 +84,11 @@ export class MachineGlyph {
 
   protected readonly mark = computed(() => marks[this.kind()]);
   protected readonly text = computed(() => `${labelFor(this.kind())}, ${wordFor(this.state())}`);
+  /** The padlock is drawn around its own middle, and made to fit the door it hangs on. */
+  protected readonly padlockPlace = computed(() => {
+    const { y, r } = this.mark();
+    return `translate(24 ${y}) scale(${r / 9})`;
+  });
   protected readonly lowerHalf = computed(() => {
     const { y, r } = this.mark();
     return `M${24 - r} ${y} A${r} ${r} 0 0 0 ${24 + r} ${y} Z`;

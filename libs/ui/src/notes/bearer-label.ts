@@ -10,6 +10,7 @@ import { type Bearer } from '@lib/contracts/web';
   styles: `
     :host {
       display: inline-block;
+      justify-self: start;
       padding: 0.125rem 0.5rem;
       border: 1px solid var(--tw-hairline);
       border-radius: 0.25rem;

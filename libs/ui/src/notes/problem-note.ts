@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  booleanAttribute,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  output,
+} from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { problemText } from './problem-text';
 
@@ -36,7 +43,7 @@ import { problemText } from './problem-text';
 export class ProblemNote {
   readonly problem = input.required<unknown>();
   /** False where trying again cannot help. */
-  readonly retriable = input(true);
+  readonly retriable = input(true, { transform: booleanAttribute });
   readonly retry = output<void>();
 
   protected readonly text = computed(() => problemText(this.problem()));

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { booleanAttribute, ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { type Copy } from '../tokens/tokens';
 
 /**
@@ -25,6 +25,7 @@ import { type Copy } from '../tokens/tokens';
     '[attr.data-copy]': 'copy()',
     '[class.tw-ticket--planned]': 'planned()',
     '[class.tw-ticket--alarmed]': 'alarmed()',
+    '[class.tw-ticket--wide]': 'wide()',
     '[class.tw-ticket--chosen]': 'chosen()',
   },
   styleUrl: './ticket-card.scss',
@@ -33,8 +34,10 @@ export class TicketCard {
   /** Which copy's edge it has; none for a small ticket inside another sheet. */
   readonly copy = input<Copy>();
   /** Not yet confirmed: its edge is dotted. */
-  readonly planned = input(false);
+  readonly planned = input(false, { transform: booleanAttribute });
   /** Something about it needs a person now. */
-  readonly alarmed = input(false);
-  readonly chosen = input(false);
+  readonly alarmed = input(false, { transform: booleanAttribute });
+  /** Its body is a table or a form: on a narrow column the stub makes room for it sooner. */
+  readonly wide = input(false, { transform: booleanAttribute });
+  readonly chosen = input(false, { transform: booleanAttribute });
 }

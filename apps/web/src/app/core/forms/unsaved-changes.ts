@@ -1,6 +1,7 @@
 import { DestroyRef, inject } from '@angular/core';
 import { type CanDeactivateFn } from '@angular/router';
 import { Confirm } from '../confirm/confirm';
+import { Session } from '../session/session';
 
 export interface HasChanges {
   hasChanges(): boolean;
@@ -9,7 +10,7 @@ export interface HasChanges {
 /** Asks before a page with unsaved changes is left for another page of the application. */
 export const keepsChanges: CanDeactivateFn<HasChanges> = (page) => {
   // A page whose content could not be loaded has no component to ask.
-  if (!page?.hasChanges()) return true;
+  if (!page?.hasChanges() || inject(Session).signedOut()) return true;
   return inject(Confirm).ask({
     heading: 'Leave without saving?',
     consequence: 'What you changed on this page has not been saved.',

@@ -39,6 +39,13 @@ export class AccountMenu {
   protected readonly session = inject(Session);
   protected readonly open = signal(false);
 
+  /** For narrow screens, where the name of the shop needs the room. */
+  protected readonly initials = computed(() => {
+    const words = (this.session.person()?.name ?? '').split(/\s+/).filter(Boolean);
+    const ends = [words.at(0), words.length > 1 ? words.at(-1) : undefined];
+    return ends.map((word) => [...(word ?? '')][0] ?? '').join('');
+  });
+
   protected readonly others = computed(() => {
     const current = this.session.membership()?.id;
     return this.session

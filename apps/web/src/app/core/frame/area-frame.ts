@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
+import {
+  booleanAttribute,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  signal,
+} from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { StatusLine } from '@lib/ui/notes/status-line';
@@ -24,7 +32,7 @@ import { type NavItem } from './nav-item';
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: {
     '[attr.data-copy]': 'area().copy',
-    '[class.thumb]': 'thumb()',
+    '[class.tw-thumb]': 'thumb()',
     '(keydown.escape)': 'open.set(false)',
   },
 })
@@ -36,7 +44,7 @@ export class AreaFrame {
   readonly area = input.required<Area>();
   readonly items = input.required<readonly NavItem[]>();
   /** For one-handed use: navigation at the bottom on a phone, and larger targets. */
-  readonly thumb = input(false);
+  readonly thumb = input(false, { transform: booleanAttribute });
   /** What being offline means here. */
   readonly offlineText = input('No connection. What you see may be old, and nothing can be saved.');
 

@@ -36,6 +36,8 @@ export class Session {
   readonly permissions = computed<ReadonlySet<Permission>>(
     () => new Set(this.#now()?.permissions ?? []),
   );
+  /** The person signed out: nothing on the page needs keeping any more. */
+  readonly signedOut = signal(false);
   /** Counts the sessions that ended without the person asking for it. */
   readonly ended = signal(0);
 
@@ -79,6 +81,7 @@ export class Session {
   take(answer: SessionAnswer): void {
     this.#token = answer.accessToken;
     this.#now.set(snapshots.keep(answer));
+    this.signedOut.set(false);
     this.#started = Promise.resolve();
   }
 
@@ -100,6 +103,7 @@ export class Session {
     if (everywhere) await firstValueFrom(this.#api.call('session.signOutEverywhere'));
     else await firstValueFrom(this.#api.callWith(bare(), 'session.signOut'));
     await this.#keepings.wipe();
+    this.signedOut.set(true);
     this.#forget();
     tabs.tell('signed-out');
   }

@@ -14,6 +14,7 @@ import { Session } from '../../core/session/session';
   selector: 'tw-memberships',
   imports: [FormNotes, MatButton, PlainPage, TicketCard],
   templateUrl: './memberships.html',
+  styleUrl: './memberships.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Memberships {

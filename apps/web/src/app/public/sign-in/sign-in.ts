@@ -31,6 +31,11 @@ import { Session } from '../../core/session/session';
     RouterLink,
   ],
   templateUrl: './sign-in.html',
+  styles: `
+    .below {
+      margin-block: 1.5rem 0;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SignIn {
