@@ -8,7 +8,8 @@ import { Advice } from '../bootstrap/progress.cjs';
 import { endProcess, ended, isOurs } from '../process/alive';
 import { anyPort, portIsFree } from '../process/ports';
 import { readState, writeState } from '../process/state-file';
-import { chooseDataFolder, runAsFor } from './place';
+import { runAsFor } from './lent-user';
+import { chooseDataFolder } from './place';
 import { initialise, postgresBinaries, spawnServer } from './server-process';
 
 export interface ClusterOptions {

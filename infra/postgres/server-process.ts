@@ -5,7 +5,7 @@ import path from 'node:path';
 import { Advice } from '../bootstrap/progress.cjs';
 import { findPostgres } from '../bootstrap/programs.cjs';
 import { quietRun } from '../bootstrap/quiet-run.cjs';
-import { type RunAs, runAsFor } from './place';
+import { type RunAs, runAsFor } from './lent-user';
 
 export function postgresBinaries(): string {
   const bin = findPostgres();
@@ -43,7 +43,9 @@ export async function initialise(dataFolder: string, password: string): Promise<
     '--no-instructions',
   ];
   try {
-    await quietRun(path.join(postgresBinaries(), 'initdb'), args, { ...runAs, cwd: '/' });
+    const initdb = path.join(postgresBinaries(), 'initdb');
+    const [program = '', ...all] = [...runAs.prefix, initdb, ...args];
+    await quietRun(program, all, { ...runAs.options, cwd: '/' });
   } finally {
     rmSync(passwordFile, { force: true });
   }
@@ -92,6 +94,7 @@ function endsWithParent(): string[] {
 export function spawnServer({ bin, state, logFile, runAs, options }: Launch): ChildProcess {
   const log = openSync(logFile, 'a', 0o600);
   const [program = '', ...args] = [
+    ...runAs.prefix,
     ...endsWithParent(),
     path.join(bin, 'postgres'),
     '-D',
@@ -100,7 +103,7 @@ export function spawnServer({ bin, state, logFile, runAs, options }: Launch): Ch
   ];
   // In a process group of its own: Ctrl-C at the keyboard is for us, who then stop it in order.
   const child = spawn(program, args, {
-    ...runAs,
+    ...runAs.options,
     cwd: '/',
     detached: true,
     stdio: ['ignore', log, log],
