@@ -1,4 +1,5 @@
 import { Injectable } from '@angular/core';
+import { unsent } from './unsent';
 
 /** Something kept on this device that sign-out must ask about and remove. */
 export interface LocalKeeping {
@@ -18,11 +19,12 @@ export class LocalKeepings {
 
   async losses(): Promise<string[]> {
     const losses = await Promise.all([...this.#all].map((keeping) => keeping.wouldLose()));
-    return losses.filter((loss) => loss !== undefined);
+    return [...losses, unsentEntries()].filter((loss) => loss !== undefined);
   }
 
   async wipe(): Promise<void> {
     await Promise.all([...this.#all].map((keeping) => keeping.wipe()));
+    unsent.forget();
     // Also what an area kept in an earlier visit and has not been opened in this one.
     const databases = (await globalThis.indexedDB?.databases?.()) ?? [];
     await Promise.all(
@@ -32,6 +34,14 @@ export class LocalKeepings {
         .map(deleted),
     );
   }
+}
+
+function unsentEntries(): string | undefined {
+  const count = unsent.count();
+  if (count === 0) return undefined;
+  return count === 1
+    ? '1 entry on this device has not been sent and would be lost.'
+    : `${count} entries on this device have not been sent and would be lost.`;
 }
 
 function deleted(name: string): Promise<void> {
