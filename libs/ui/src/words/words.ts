@@ -15,6 +15,14 @@ const words: Readonly<Record<string, string>> = {
   past_due: 'past due',
   in_process: 'in process',
   none: 'no',
+  wont_start: 'won’t start',
+  wont_fill: 'won’t fill',
+  wont_drain: 'won’t drain',
+  wont_heat: 'won’t heat',
+  wont_turn: 'won’t turn',
+  wont_spin: 'won’t spin',
+  wont_lock: 'won’t lock',
+  wont_open: 'won’t open',
 };
 
 /** `locked_out` is called "locked out". */
