@@ -43,6 +43,22 @@ create table contract_stores (
 create index contract_stores_of_store on contract_stores (shop_id, store_id);
 select app.protect('contract_stores', 'client');
 
+-- When the shop is closed: a round that falls on such a day is shifted.
+create table closures (
+  shop_id uuid not null references shops (id),
+  id uuid not null,
+  -- 1 is Monday, 7 Sunday.
+  weekdays jsonb not null default '[]',
+  days jsonb not null default '[]',
+  version integer not null default 1,
+  created_at timestamptz not null default now(),
+  updated_at timestamptz not null default now(),
+  primary key (shop_id, id),
+  unique (shop_id)
+);
+select app.versioned('closures');
+select app.protect('closures', 'all');
+
 create table rounds (
   shop_id uuid not null references shops (id),
   id uuid not null,

@@ -93,6 +93,13 @@ export const round = z.object({
   visitState: z.string().nullable(),
 });
 
+/** Days on which no round is planned: weekdays (1 is Monday, 7 Sunday), and single days. */
+export const closures = z.object({
+  weekdays: z.array(z.int().min(1).max(7)),
+  days: z.array(z.object({ day, words: z.string() })),
+  version,
+});
+
 const contractParams = z.strictObject({ contractId: id });
 
 export const contractOperations = defineOperations({
@@ -168,6 +175,33 @@ export const contractOperations = defineOperations({
     answer: contractShown,
     status: 200,
     problems: ['conflict'],
+  },
+  'closures.show': {
+    method: 'GET',
+    path: '/api/closures',
+    summary: 'When the shop is closed, so that no round falls on it',
+    permission: 'settings.read',
+    answer: closures,
+  },
+  'closures.change': {
+    method: 'PUT',
+    path: '/api/closures',
+    summary: 'Set when the shop is closed; rounds already planned stay',
+    permission: 'settings.change',
+    ifMatch: true,
+    body: z.strictObject({
+      weekdays: z
+        .array(z.int().min(1).max(7))
+        .max(6)
+        .refine((all) => new Set(all).size === all.length, { error: 'names a day twice' }),
+      days: z
+        .array(z.strictObject({ day, words: line(80) }))
+        .max(200)
+        .refine((all) => new Set(all.map((d) => d.day)).size === all.length, {
+          error: 'names a day twice',
+        }),
+    }),
+    answer: closures,
   },
   'rounds.list': {
     method: 'GET',

@@ -67,6 +67,7 @@ export const formRules: Record<string, Record<string, FieldRule>> = {
   'contracts.create': {"name":{"required":true,"minLength":1,"maxLength":120},"rule":{"required":true,"minLength":4,"maxLength":200},"startsOn":{"required":true},"endsOn":{},"startTime":{"pattern":"^([01]\\d|2[0-3]):[0-5]\\d$"},"shift":{},"coverage":{"required":true},"techMembershipId":{},"stores":{"required":true},"clientId":{"required":true}},
   'contracts.change': {"name":{"required":true,"minLength":1,"maxLength":120},"rule":{"required":true,"minLength":4,"maxLength":200},"startsOn":{"required":true},"endsOn":{},"startTime":{"pattern":"^([01]\\d|2[0-3]):[0-5]\\d$"},"shift":{},"coverage":{"required":true},"techMembershipId":{},"stores":{"required":true}},
   'contracts.end': {"endsOn":{"required":true}},
+  'closures.change': {"weekdays":{"required":true},"days":{"required":true}},
   'statements.close': {"month":{"required":true,"pattern":"^\\d{4}-(0[1-9]|1[0-2])$"}},
   'payments.record': {"storeId":{"required":true},"method":{"required":true},"amount":{"required":true,"min":1,"max":1000000000000},"receivedOn":{"required":true},"words":{"maxLength":200}},
   'payments.startCard': {"statementId":{},"storeId":{},"amount":{"min":1,"max":1000000000000}},

@@ -144,6 +144,8 @@ export const routes = {
   'contracts.create': ['POST', '/api/contracts', true],
   'contracts.change': ['PATCH', '/api/contracts/:contractId'],
   'contracts.end': ['POST', '/api/contracts/:contractId/end', true],
+  'closures.show': ['GET', '/api/closures'],
+  'closures.change': ['PUT', '/api/closures'],
   'rounds.list': ['GET', '/api/rounds'],
   'statements.closePreview': ['GET', '/api/close-preview'],
   'statements.close': ['POST', '/api/closes', true],

@@ -36,7 +36,13 @@ export function mailSession(options: { smtpUrl: string; from: string }): MailSes
     const message = await compose(mail, { name: mail.fromName ?? fromName, address: fromAddress });
     if (!connection) {
       try {
-        connection = await connect(options.smtpUrl);
+        const opened = await connect(options.smtpUrl);
+        // A server may hang up between two mails; the next one then takes a new connection, instead
+        // of finding out in the middle of its own conversation.
+        opened.once('end', () => {
+          if (connection === opened) close();
+        });
+        connection = opened;
       } catch (error) {
         return { outcome: 'retry', error: describe(error) };
       }
@@ -46,6 +52,7 @@ export function mailSession(options: { smtpUrl: string; from: string }): MailSes
       // A connection that breaks reports it as an event; only the first answer counts.
       const broken = (error: Error) => resolve(ended(error));
       open.once('error', broken);
+      open.once('end', () => broken(new Error('The mail server hung up')));
       open.send({ from: fromAddress, to: [mail.to.address] }, message, (error) => {
         open.off('error', broken);
         resolve(error ? ended(error) : { outcome: 'sent' });

@@ -29,10 +29,14 @@ export const buildStatementsJob: Job = {
   },
 };
 
-/** Builds the next statements of a run, each in a transaction of its own. */
-export async function buildStatements(context: Context, runId: string, log: Log): Promise<void> {
+/**
+ * Builds the next statements of a run, each in a transaction of its own.
+ *
+ * @returns whether there were any to build
+ */
+export async function buildStatements(context: Context, runId: string, log: Log): Promise<boolean> {
   const work = await withTenant(context, () => openRun(context, runId));
-  if (!work) return;
+  if (!work) return false;
   let built = 0;
   for (const storeId of work.storeIds) {
     if (!(await buildOne(context, work.shop, work.run, storeId, log))) continue;
@@ -40,6 +44,7 @@ export async function buildStatements(context: Context, runId: string, log: Log)
     if (built % batch === 0) await moveRun(context, runId, ['render']);
   }
   await moveRun(context, runId, ['build', 'render']);
+  return work.storeIds.length > 0;
 }
 
 async function openRun(

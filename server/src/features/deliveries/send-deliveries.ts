@@ -1,0 +1,218 @@
+import { setTimeout as wait } from 'node:timers/promises';
+import { type Config } from '../../core/config';
+import { type Context, systemContext } from '../../core/context';
+import { row, rows, withTenant, write } from '../../core/database/tenancy';
+import { files } from '../../core/files/file-store';
+import { metrics } from '../../core/http/metrics';
+import { enqueue } from '../../core/jobs/boss';
+import { type Job } from '../../core/jobs/work';
+import { announce } from '../../core/live/live';
+import { type HandedOver, type Mail, type MailSession, mailSession } from '../../core/mail/mailer';
+import { leaseSeconds, type Settled, settle, settleLost } from '../../core/mail/settle';
+import { shopFacts, type ShopFacts } from '../../core/shop-facts';
+import { moveRun } from '../statements/move-run';
+import { type StoredSnapshot } from '../statements/stored-snapshot';
+import { statementLetter } from './statement-letter';
+
+/** Conversations with the mail server at once, of one shop's job. */
+const lanes = 3;
+/** Mails after which the page of a month close is told how far it is. */
+const tellEvery = 10;
+
+interface Claimed {
+  id: string;
+  attempt: number;
+  recipient: string;
+  recipientName: string;
+  subject: string;
+  messageId: string;
+  statementId: string;
+  runId: string;
+  snapshot: StoredSnapshot;
+  fileName: string | null;
+  sha256: string | null;
+}
+
+export const sendDeliveriesJob: Job = {
+  queue: 'deliveries-send',
+  async work(data, { config }) {
+    await sendDeliveries(systemContext(String(data.shopId), new Date()), config);
+  },
+};
+
+/** Hands over every mail of a shop that is due. */
+export async function sendDeliveries(context: Context, config: Config): Promise<void> {
+  const shop = await withTenant(context, () => shopFacts(context));
+  const runs = new Set<string>();
+  const lane = async () => {
+    const session = mailSession(config.mail);
+    try {
+      let sent = 0;
+      let next = await withTenant(context, () => claim(context));
+      while (next) {
+        const { runId } = next;
+        runs.add(runId);
+        next = await workOne(context, shop, config, session, next);
+        sent += 1;
+        if (sent % tellEvery === 0) await moveRun(context, runId, []);
+      }
+    } finally {
+      session.close();
+    }
+  };
+  const ends = await Promise.allSettled(Array.from({ length: lanes }, lane));
+  for (const runId of runs) await moveRun(context, runId, []);
+  const broken = ends.find((end) => end.status === 'rejected');
+  if (broken) throw broken.reason;
+}
+
+/** Hands one over, writes down how that ended and takes the next, both with the same commit. */
+async function workOne(
+  context: Context,
+  shop: ShopFacts,
+  config: Config,
+  session: MailSession,
+  claimed: Claimed,
+): Promise<Claimed | undefined> {
+  const settled = settle(
+    await handOver(context, shop, config, session, claimed),
+    claimed.attempt,
+    new Date(),
+  );
+  metrics.deliveries.inc({ state: settled.state });
+  return persistently(() =>
+    withTenant(context, async () => {
+      await writeSettled(context, claimed, settled);
+      return claim(context);
+    }),
+  );
+}
+
+/**
+ * What is known of a mail must not be lost to a database that is just restarting: it is all that
+ * tells a sent mail from an uncertain one.
+ */
+async function persistently<T>(work: () => Promise<T>): Promise<T> {
+  for (const pause of [500, 1_500, 4_000]) {
+    try {
+      return await work();
+    } catch {
+      await wait(pause);
+    }
+  }
+  return work();
+}
+
+/** Takes one due mail for this attempt; committed before anything is said to the mail server. */
+async function claim(context: Context): Promise<Claimed | undefined> {
+  const [taken] = await write<{ id: string; attempt: number }>(
+    `update deliveries d
+     set state = 'handing_over', attempt = d.attempt + 1,
+       lease_until = now() + make_interval(secs => $leaseSeconds)
+     where d.shop_id = $shopId and d.id = (
+       select w.id from deliveries w
+       join statements s on s.shop_id = w.shop_id and s.id = w.statement_id
+       join statement_runs r on r.shop_id = s.shop_id and r.id = s.run_id and r.state <> 'held'
+       where w.shop_id = $shopId and w.state = 'waiting' and w.next_attempt_at <= now()
+       order by w.next_attempt_at, w.id limit 1
+       for update of w skip locked)
+     returning d.id, d.attempt`,
+    { shopId: context.shopId, leaseSeconds },
+  );
+  if (!taken) return undefined;
+  return row<Claimed>(
+    `select d.id, d.attempt, d.recipient, d.recipient_name as "recipientName", d.subject,
+       d.message_id as "messageId", s.id as "statementId", s.run_id as "runId", s.snapshot,
+       a.name as "fileName", a.sha256
+     from deliveries d
+     join statements s on s.shop_id = d.shop_id and s.id = d.statement_id
+     left join attachments a on a.shop_id = s.shop_id and a.owner_kind = 'statement' and a.owner_id = s.id
+     where d.shop_id = $shopId and d.id = $id`,
+    { shopId: context.shopId, id: taken.id },
+  );
+}
+
+async function handOver(
+  context: Context,
+  shop: ShopFacts,
+  config: Config,
+  session: MailSession,
+  claimed: Claimed,
+): Promise<HandedOver> {
+  let mail: Mail;
+  try {
+    mail = await writeMail(context, shop, config, claimed);
+  } catch (error) {
+    // Nothing was said to the mail server yet, so trying again is safe.
+    return { outcome: 'retry', error: `The mail could not be written: ${String(error)}` };
+  }
+  return session.handOver(mail);
+}
+
+async function writeMail(
+  context: Context,
+  shop: ShopFacts,
+  config: Config,
+  claimed: Claimed,
+): Promise<Mail> {
+  if (!claimed.sha256) throw new Error('the PDF is missing');
+  const letter = statementLetter({
+    shop,
+    recipientName: claimed.recipientName,
+    subject: claimed.subject,
+    snapshot: claimed.snapshot,
+    url: `${config.publicUrl}/client/statements/${claimed.statementId}`,
+  });
+  return {
+    ...letter,
+    to: { name: claimed.recipientName, address: claimed.recipient },
+    subject: claimed.subject,
+    messageId: claimed.messageId,
+    fromName: shop.mailName || shop.name,
+    replyTo: shop.replyTo,
+    attachments: [
+      {
+        filename: claimed.fileName ?? 'statement.pdf',
+        content: await files().get(context.shopId, claimed.sha256),
+        contentType: 'application/pdf',
+      },
+    ],
+  };
+}
+
+/** Only the attempt that holds the mail may say how it ended. */
+async function writeSettled(context: Context, claimed: Claimed, settled: Settled): Promise<void> {
+  await write(
+    `update deliveries
+     set state = $state, last_error = $error, lease_until = null,
+       sent_at = case when $state = 'sent' then now() end,
+       next_attempt_at = coalesce($nextAttemptAt::timestamptz, next_attempt_at)
+     where shop_id = $shopId and id = $id and attempt = $attempt and state = 'handing_over'`,
+    { shopId: context.shopId, id: claimed.id, attempt: claimed.attempt, ...settled },
+  );
+}
+
+/** For the sweep: mails whose process died in the middle, and mails whose time to try again came. */
+export function sweepDeliveries(context: Context): Promise<void> {
+  return withTenant(context, async () => {
+    const { state, error } = settleLost();
+    const lost = await write<{ id: string; runId: string }>(
+      `update deliveries d set state = $state, last_error = $error, lease_until = null
+       from statements s
+       where d.shop_id = $shopId and d.state = 'handing_over' and d.lease_until < now()
+         and s.shop_id = d.shop_id and s.id = d.statement_id
+       returning d.id, s.run_id as "runId"`,
+      { shopId: context.shopId, state, error },
+    );
+    metrics.deliveries.inc({ state }, lost.length);
+    for (const runId of new Set(lost.map((one) => one.runId))) {
+      await announce(context, 'statement-run', runId);
+    }
+    const due = await rows(
+      `select 1 from deliveries
+       where shop_id = $shopId and state = 'waiting' and next_attempt_at <= now() limit 1`,
+      { shopId: context.shopId },
+    );
+    if (due.length) await enqueue('deliveries-send', { shopId: context.shopId });
+  });
+}
