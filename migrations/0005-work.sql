@@ -80,11 +80,13 @@ create table acts (
   by_membership_id uuid not null,
   device_at timestamptz not null,
   received_at timestamptz not null default now(),
+  -- Orders acts of one instant as they came in.
+  seq bigint generated always as identity,
   primary key (shop_id, id),
   foreign key (shop_id, visit_id) references visits (shop_id, id),
   foreign key (shop_id, by_membership_id) references memberships (shop_id, id)
 );
-create index acts_of_visit on acts (shop_id, visit_id, device_at, id);
+create index acts_of_visit on acts (shop_id, visit_id, device_at, seq);
 select app.protect('acts', 'shop');
 select app.append_only('acts');
 

@@ -13,6 +13,10 @@ import { partsRoutes } from './features/parts/parts.router';
 import { pricesRoutes } from './features/prices/prices.router';
 import { settingsRoutes } from './features/settings/settings.router';
 import { storesRoutes } from './features/stores/stores.router';
+import { callsRoutes } from './features/calls/calls.router';
+import { rulingsRoutes } from './features/rulings/rulings.router';
+import { ticketsRoutes } from './features/tickets/tickets.router';
+import { visitsRoutes } from './features/visits/visits.router';
 
 /** Every route of the API, a line a feature. */
 export const routes: Route[] = [
@@ -30,4 +34,8 @@ export const routes: Route[] = [
   ...pricesRoutes,
   ...settingsRoutes,
   ...storesRoutes,
+  ...callsRoutes,
+  ...rulingsRoutes,
+  ...ticketsRoutes,
+  ...visitsRoutes,
 ];

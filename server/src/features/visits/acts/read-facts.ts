@@ -1,0 +1,152 @@
+import { type Act } from '@lib/contracts';
+import { type Context } from '../../../core/context';
+import { type Bind, rows } from '../../../core/database/tenancy';
+import { ticketName } from '../../statements/document-names';
+import { type DatedAct, type MachineFact, type VisitFacts } from './visit-record';
+
+/** The visit that acts are recorded on, locked for the transaction. */
+export interface VisitToRecord {
+  id: string;
+  clientId: string;
+  storeId: string;
+  state: string;
+  techMembershipId: string | null;
+  techName: string | null;
+  ticketNumber: number | null;
+  version: number;
+}
+
+const dayMs = 86_400_000;
+
+/** All that the arriving acts name, looked up at once. */
+export async function readFacts(
+  context: Context,
+  visit: VisitToRecord,
+  acts: readonly Act[],
+): Promise<VisitFacts> {
+  const { shopId } = context;
+  const of: Bind = { shopId, visitId: visit.id, storeId: visit.storeId };
+  const ids = (sql: string, bind: Bind) =>
+    rows<{ id: string }>(sql, bind).then((found) => new Set(found.map((each) => each.id)));
+  const named = (pick: (act: Act) => string | null | undefined) =>
+    acts.map(pick).filter((id): id is string => typeof id === 'string');
+
+  const jobIds = named((act) => (act.kind === 'job_opened' ? act.payload.jobId : null));
+  const partUseIds = named((act) => (act.kind === 'part_used' ? act.payload.partUseId : null));
+  const itemIds = named((act) => ('openItemId' in act.payload ? act.payload.openItemId : null));
+  const made = { ...of, jobIds, partUseIds, itemIds };
+  return {
+    cancelled: visit.state === 'cancelled',
+    latest: context.now.getTime() + dayMs,
+    ticket: visit.ticketNumber === null ? null : ticketName(visit.ticketNumber),
+    machines: await machinesOf(of),
+    callIds: await ids(
+      `select id from calls where shop_id = $shopId and store_id = $storeId
+         and state in ('open', 'planned') and id = any ($callIds::uuid[])`,
+      {
+        shopId,
+        storeId: visit.storeId,
+        callIds: named((act) => (act.kind === 'job_opened' ? act.payload.callId : null)),
+      },
+    ),
+    partIds: await ids(
+      'select id from parts where shop_id = $shopId and id = any ($partIds::uuid[])',
+      {
+        shopId,
+        partIds: named((act) => (act.kind === 'part_used' ? act.payload.partId : null)),
+      },
+    ),
+    causeIds: await ids(
+      `select j.id from jobs j where j.shop_id = $shopId and j.client_id = $clientId
+         and j.visit_id <> $visitId and j.result is not null and j.id = any ($causeIds::uuid[])`,
+      {
+        shopId,
+        visitId: visit.id,
+        clientId: visit.clientId,
+        causeIds: named((a) => (a.kind === 'warranty_marked' ? a.payload.causedByJobId : null)),
+      },
+    ),
+    takenIds: await ids(
+      `select id from jobs
+         where shop_id = $shopId and id = any ($jobIds::uuid[]) and visit_id <> $visitId
+       union select u.id from part_uses u join jobs j on j.shop_id = u.shop_id and j.id = u.job_id
+         where u.shop_id = $shopId and u.id = any ($partUseIds::uuid[]) and j.visit_id <> $visitId
+       union select id from open_items
+         where shop_id = $shopId and id = any ($itemIds::uuid[]) and visit_id <> $visitId`,
+      made,
+    ),
+    openItemIds: await ids(
+      `select id from open_items
+       where shop_id = $shopId and store_id = $storeId and id = any ($itemIds::uuid[])`,
+      { shopId, storeId: visit.storeId, itemIds },
+    ),
+    photoOwners: await photoOwners(
+      shopId,
+      named((act) => (act.kind === 'photo' ? act.payload.attachmentId : null)),
+    ),
+    keptJobIds: await keptJobs(
+      of,
+      named((act) => (act.kind === 'job_dropped' ? act.payload.jobId : null)),
+    ),
+  };
+}
+
+async function machinesOf(of: Bind): Promise<Map<string, MachineFact>> {
+  const machines = await rows<MachineFact & { id: string }>(
+    `select id, bay, kind, energy, state = 'retired' as retired from machines
+     where shop_id = $shopId and store_id = $storeId`,
+    { shopId: of.shopId, storeId: of.storeId },
+  );
+  return new Map(machines.map((machine) => [machine.id, machine]));
+}
+
+async function photoOwners(shopId: string, photoIds: string[]): Promise<Map<string, string>> {
+  if (photoIds.length === 0) return new Map();
+  const photos = await rows<{ id: string; ownerId: string }>(
+    `select id, owner_id as "ownerId" from attachments
+     where shop_id = $shopId and id = any ($photoIds::uuid[])`,
+    { shopId, photoIds },
+  );
+  return new Map(photos.map((photo) => [photo.id, photo.ownerId]));
+}
+
+/** Jobs that were ruled on, or that another job names as its cause. */
+async function keptJobs(of: Bind, jobIds: string[]): Promise<Set<string>> {
+  if (jobIds.length === 0) return new Set();
+  const kept = await rows<{ id: string }>(
+    `select j.id from jobs j where j.shop_id = $shopId and j.id = any ($jobIds::uuid[])
+       and (exists (select 1 from rulings r where r.shop_id = j.shop_id and r.visit_id = j.visit_id
+           and r.job_id = j.id)
+         or exists (select 1 from jobs o where o.shop_id = j.shop_id and o.client_id = j.client_id
+           and o.caused_by_job_id = j.id))`,
+    { shopId: of.shopId, jobIds },
+  );
+  return new Set(kept.map((job) => job.id));
+}
+
+interface StoredRow {
+  id: string;
+  kind: Act['kind'];
+  payload: Act['payload'];
+  deviceAt: Date;
+  seq: number;
+  membershipId: string;
+  name: string;
+}
+
+/** What was recorded on the visit before. */
+export async function storedActs(context: Context, visitId: string): Promise<DatedAct[]> {
+  const stored = await rows<StoredRow>(
+    `select a.id, a.kind, a.payload, a.device_at as "deviceAt", a.seq,
+       a.by_membership_id as "membershipId", m.name
+     from acts a join memberships m on m.shop_id = a.shop_id and m.id = a.by_membership_id
+     where a.shop_id = $shopId and a.visit_id = $visitId order by a.device_at, a.seq`,
+    { shopId: context.shopId, visitId },
+  );
+  return stored.map(({ id, kind, payload, deviceAt, seq, membershipId, name }) => ({
+    act: { id, kind, at: deviceAt.toISOString(), payload } as Act,
+    at: deviceAt.getTime(),
+    seq,
+    by: { membershipId, name },
+  }));
+}
