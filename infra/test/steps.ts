@@ -74,6 +74,7 @@ export async function jest(
   projects: readonly string[],
   env: Env,
   more: readonly string[] = [],
+  workers = 2,
 ): Promise<Tally> {
   progress.say(`\nTests of ${projects.join(', ')}`);
   mkdirSync(results, { recursive: true });
@@ -83,7 +84,7 @@ export async function jest(
     '--selectProjects',
     ...projects,
     '--ci',
-    '--maxWorkers=2',
+    `--maxWorkers=${workers}`,
     '--passWithNoTests',
     '--json',
     `--outputFile=${file}`,
