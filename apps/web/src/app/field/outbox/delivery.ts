@@ -11,7 +11,7 @@ export interface Courier {
 }
 
 /** Who keeps what became of them. */
-export interface Ledger {
+export interface Keeper {
   taken(ids: readonly string[]): Promise<void>;
   refused(ids: readonly string[], reason: string): Promise<void>;
 }
@@ -26,22 +26,22 @@ const batch = 100;
 export async function deliverVisit(
   acts: readonly LocalAct[],
   courier: Courier,
-  ledger: Ledger,
+  keeper: Keeper,
 ): Promise<Problem | undefined> {
   const end = acts.findIndex(({ act }) => act.kind === 'left' || act.kind === 'signed_off');
   const [work, closing] = end < 0 ? [acts, []] : [acts.slice(0, end), acts.slice(end)];
   const photos = acts.filter(({ act }) => act.kind === 'photo');
   try {
-    for (const some of inBatches(work.filter(notPhoto))) await send(some, courier, ledger);
-    for (const photo of photos) await sendPhoto(photo, courier, ledger);
-    for (const some of inBatches(closing.filter(notPhoto))) await send(some, courier, ledger);
+    for (const some of inBatches(work.filter(notPhoto))) await send(some, courier, keeper);
+    for (const photo of photos) await sendPhoto(photo, courier, keeper);
+    for (const some of inBatches(closing.filter(notPhoto))) await send(some, courier, keeper);
     return undefined;
   } catch (error) {
     return problemFrom(error);
   }
 }
 
-async function send(acts: readonly LocalAct[], courier: Courier, ledger: Ledger): Promise<void> {
+async function send(acts: readonly LocalAct[], courier: Courier, keeper: Keeper): Promise<void> {
   const first = acts[0];
   if (!first) return;
   try {
@@ -49,12 +49,12 @@ async function send(acts: readonly LocalAct[], courier: Courier, ledger: Ledger)
       first.visitId,
       acts.map(({ act }) => act),
     );
-    await keep(results, ledger);
+    await keep(results, keeper);
   } catch (error) {
     const problem = problemFrom(error);
     if (triesAgain(problem)) throw problem;
     if (acts.length === 1 || isOfVisit(problem)) {
-      await ledger.refused(
+      await keeper.refused(
         acts.map(({ id }) => id),
         reasonOf(problem),
       );
@@ -62,29 +62,29 @@ async function send(acts: readonly LocalAct[], courier: Courier, ledger: Ledger)
     }
     // Something in it cannot be read at all: the rest must not suffer for it.
     const middle = Math.ceil(acts.length / 2);
-    await send(acts.slice(0, middle), courier, ledger);
-    await send(acts.slice(middle), courier, ledger);
+    await send(acts.slice(0, middle), courier, keeper);
+    await send(acts.slice(middle), courier, keeper);
   }
 }
 
-async function sendPhoto(photo: LocalAct, courier: Courier, ledger: Ledger): Promise<void> {
+async function sendPhoto(photo: LocalAct, courier: Courier, keeper: Keeper): Promise<void> {
   if (photo.act.kind !== 'photo') return;
   try {
     await courier.upload(photo.act.payload.attachmentId);
   } catch (error) {
     const problem = problemFrom(error);
     if (triesAgain(problem)) throw problem;
-    await ledger.refused([photo.id], reasonOf(problem));
+    await keeper.refused([photo.id], reasonOf(problem));
     return;
   }
-  await send([photo], courier, ledger);
+  await send([photo], courier, keeper);
 }
 
-async function keep(results: readonly ActResult[], ledger: Ledger): Promise<void> {
+async function keep(results: readonly ActResult[], keeper: Keeper): Promise<void> {
   const taken = results.filter(({ outcome }) => outcome !== 'refused').map(({ id }) => id);
-  if (taken.length > 0) await ledger.taken(taken);
+  if (taken.length > 0) await keeper.taken(taken);
   for (const { id, outcome, reason } of results) {
-    if (outcome === 'refused') await ledger.refused([id], reason ?? 'No reason was given.');
+    if (outcome === 'refused') await keeper.refused([id], reason ?? 'No reason was given.');
   }
 }
 

@@ -8,6 +8,7 @@ import { type Act, type ActKind, inOrder, type LocalAct, type PayloadOf } from '
 
 /** Sent acts are kept this long, to be counted and to stand over a day that is not asked for anew. */
 const keptFor = 36 * 3_600_000;
+const smallStep = 600_000;
 
 /**
  * Everything recorded on this device for the membership the person works as. An act is shown at
@@ -28,13 +29,25 @@ export class Outbox {
   readonly refused = computed(() => this.#acts().filter(({ state }) => state === 'refused'));
   readonly sent = computed(() => this.#acts().filter(({ state }) => state === 'sent'));
 
+  /** Whose acts are shown, once they are read. */
+  #shownOf: string | undefined;
+  #reading: Promise<void> | undefined;
+
   constructor() {
     effect(() => {
-      const membershipId = this.#store.membershipId();
-      untracked(() => this.#acts.set([]));
-      if (membershipId) void untracked(() => this.load());
+      // A device that keeps nothing says so when something is recorded.
+      if (this.#store.membershipId()) untracked(() => this.#ready().catch(() => undefined));
+      else this.#acts.set([]);
     });
     this.#otherTabs?.addEventListener('message', () => void this.load());
+  }
+
+  /** Waits until the acts of the membership are read, so that new ones come after them. */
+  async #ready(): Promise<void> {
+    while (this.#shownOf !== this.#store.membershipId()) {
+      this.#reading ??= this.load().finally(() => (this.#reading = undefined));
+      await this.#reading;
+    }
   }
 
   /** Reads what the device keeps, and lets go of what was sent long ago. */
@@ -53,6 +66,8 @@ export class Outbox {
       );
     if (membershipId !== this.#store.membershipId()) return;
     const found = all.filter((act) => !gone.includes(act));
+    if (this.#shownOf !== membershipId) this.#acts.set([]);
+    this.#shownOf = membershipId;
     // Acts made while this was reading are newer than what was read.
     this.#acts.update((now) => {
       const known = new Set(found.map(({ id }) => id));
@@ -68,19 +83,20 @@ export class Outbox {
   /** Records what happened. Resolves when the device keeps it; it may be sent much later. */
   async record<K extends ActKind>(visitId: string, kind: K, payload: PayloadOf<K>): Promise<void> {
     const id = v7();
-    const act = { id, kind, at: new Date().toISOString(), payload } as unknown as Act;
-    const order = Math.max(this.#acts().at(-1)?.order ?? 0, Date.now()) + 1;
-    const local: LocalAct = {
-      id,
-      order,
-      visitId,
-      act,
-      state: 'waiting',
-      reason: '',
-      answeredAt: null,
-    };
-    this.#acts.update((acts) => [...acts, local]);
     try {
+      if (this.#shownOf !== this.#store.membershipId()) await this.#ready();
+      const last = this.#acts().at(-1);
+      const local: LocalAct = {
+        id,
+        order: Math.max(last?.order ?? 0, Date.now()) + 1,
+        visitId,
+        act: { id, kind, at: timeAfter(last?.act.at), payload } as unknown as Act,
+        state: 'waiting',
+        reason: '',
+        answeredAt: null,
+      };
+      // Shown at once: the database may take a moment.
+      this.#acts.update((acts) => [...acts, local]);
       await (await this.#store.database()).put('acts', [local]);
     } catch (error) {
       this.#acts.update((acts) => acts.filter((each) => each.id !== id));
@@ -90,8 +106,7 @@ export class Outbox {
       );
       throw error;
     }
-    this.#count();
-    this.#otherTabs?.postMessage('changed');
+    this.#changed();
     this.added.update((n) => n + 1);
   }
 
@@ -169,4 +184,14 @@ export class Outbox {
     const left = this.#acts().filter(({ state }) => state !== 'sent').length;
     if (membershipId) unsent.note(membershipId, left);
   }
+}
+
+/**
+ * Now, but not before the act before it: a clock that is set back a little in the middle of a job
+ * must not turn around what happened. A clock that was far ahead is not followed.
+ */
+function timeAfter(last: string | undefined): string {
+  const now = Date.now();
+  const before = last ? Date.parse(last) : 0;
+  return new Date(before > now && before - now < smallStep ? before : now).toISOString();
 }
