@@ -21,6 +21,7 @@ export { LoadNote, type Loadable } from './notes/load-note';
 export { MoneyText } from './format/money-text';
 export { amountField, amountFrom, currencySign, moneyText } from './format/money';
 export { PageHead } from './head/page-head';
+export { SectionHead } from './head/section-head';
 export { ProblemNote } from './notes/problem-note';
 export { problemText } from './notes/problem-text';
 export { ProgressLine } from './notes/progress-line';
