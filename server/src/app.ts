@@ -16,6 +16,7 @@ import { serveRoute } from './core/http/serve-route';
 import { webFiles } from './core/http/web-files';
 import { type Log } from './core/logging';
 import { notFound } from './core/problems/problem';
+import { stripeWebhook } from './features/payments/stripe-webhook';
 import { routes } from './routes';
 
 /** The web process's Express application: the API, the web files, and what watches over it. */
@@ -43,6 +44,8 @@ export function createApp(config: Config, log: Log): Express {
   );
   app.use(securityHeaders());
   app.get('/metrics', serveMetrics());
+  // Before the rate limit: it comes from few addresses, and its signature is its permission.
+  app.post('/api/stripe/webhook', stripeWebhook(config, log));
   app.use('/api', limitRate(config.rateLimit), (_request, response, next) => {
     response.set('Cache-Control', 'no-store');
     next();

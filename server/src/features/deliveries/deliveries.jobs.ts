@@ -1,0 +1,4 @@
+import { type Job } from '../../core/jobs/work';
+import { sendDeliveriesJob } from './send-deliveries';
+
+export const deliveriesJobs: Job[] = [{ ...sendDeliveriesJob, atOnce: 2 }];
