@@ -9,32 +9,22 @@ import { Session } from './core/session/session';
   selector: 'tw-root',
   imports: [RouterOutlet],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `
-    <a class="skip tw-unseen" href="#main" (click)="skip($event)">Skip to the content</a>
-    <router-outlet />
-  `,
-  styles: `
-    .skip:focus {
-      position: absolute;
-      inset: 0.5rem auto auto 0.5rem;
-      z-index: 10;
-      padding: 0.5rem 1rem;
-      background: var(--tw-carbon);
-      color: var(--tw-on-carbon);
-    }
-  `,
+  template: `<router-outlet />`,
 })
 export class App {
   constructor() {
     inject(Scheme);
     inject(Arrival).watch();
+    this.#skipToContent();
     this.#leadBackAfterEnd();
   }
 
-  /** The address of the skip link would leave the page, because of the base element. */
-  protected skip(event: Event): void {
-    event.preventDefault();
-    document.querySelector<HTMLElement>('main')?.focus();
+  /** The skip link stands first in index.html; its address alone would leave the page. */
+  #skipToContent(): void {
+    document.querySelector('.tw-skip')?.addEventListener('click', (event) => {
+      event.preventDefault();
+      document.querySelector<HTMLElement>('main')?.focus();
+    });
   }
 
   #leadBackAfterEnd(): void {

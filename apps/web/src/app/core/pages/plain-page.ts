@@ -1,48 +1,35 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
+import { StatusLine } from '@lib/ui/notes/status-line';
+import { Messages } from '../messages/messages';
 
-/** A page that stands alone: sign-in and its kin, and pages that say why there is no other. */
+/**
+ * A page that stands alone, below the head that index.html brings: sign-in and its kin, and pages
+ * that say why there is no other.
+ */
 @Component({
   selector: 'tw-plain-page',
+  imports: [StatusLine],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <header><a href="/">Tumblewright</a></header>
     <main id="main" tabindex="-1">
       <h1 tabindex="-1">{{ heading() }}</h1>
+      <tw-status
+        [message]="messages.message()?.text"
+        [action]="messages.message()?.action?.label"
+        (acted)="messages.act()"
+        (dismissed)="messages.clear()"
+      />
       <ng-content />
     </main>
   `,
   styles: `
     :host {
       display: block;
-      min-block-size: 100dvh;
-      padding: 1rem;
-      border-block-start: 0.375rem solid var(--tw-edge-white);
+      padding-block-end: 2rem;
     }
-    header,
     main {
-      max-inline-size: 26rem;
+      max-inline-size: min(26rem, calc(100% - 2rem));
       margin-inline: auto;
-    }
-    header {
-      padding-block: 0.5rem 1.5rem;
-    }
-    header a {
-      display: inline-flex;
-      align-items: center;
-      gap: 0.5rem;
-      min-block-size: 2.75rem;
-      color: var(--tw-ink);
-      font-weight: 600;
-      text-decoration: none;
-    }
-    header a::before {
-      content: '';
-      inline-size: 1.125rem;
-      block-size: 1.125rem;
-      border: 3px solid var(--tw-carbon);
-      border-radius: 50%;
-    }
-    main {
       padding: 1.5rem;
       border: 1px solid var(--tw-hairline);
       border-radius: var(--tw-corner);
@@ -59,13 +46,9 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
         padding: 1rem;
       }
     }
-    @media (min-width: 60rem) {
-      header {
-        padding-block-start: 3rem;
-      }
-    }
   `,
 })
 export class PlainPage {
   readonly heading = input.required<string>();
+  protected readonly messages = inject(Messages);
 }
