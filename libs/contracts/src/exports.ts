@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { showFilter } from './clients';
 import { defineOperations } from './operation';
 
 export const exportKind = z.enum(['clients', 'stores', 'contacts', 'machines', 'parts']);
@@ -10,6 +11,7 @@ export const exportOperations = defineOperations({
     summary: 'A whole list as CSV, for a spreadsheet; also while the shop is paused',
     permission: 'exports.read',
     params: z.strictObject({ kind: exportKind }),
+    query: z.strictObject({ show: showFilter }),
     answerType: 'text/csv',
   },
 });

@@ -1,0 +1,79 @@
+import { once } from 'node:events';
+import { type Response } from 'express';
+import { type Context } from '../../core/context';
+import { rows, withTenant } from '../../core/database/tenancy';
+import { type InputOf, RawReply } from '../../core/http/route';
+import { csvRow, csvStart } from '../../core/lists/csv';
+import { shown } from '../../core/lists/shown';
+import { shopFacts, type ShopFacts } from '../../core/shop-facts';
+import { tradeDayNow } from '../settings/trade-day';
+import { cellsOf, type ExportedList, exportedLists } from './lists';
+
+type Show = InputOf<'exports.download'>['query']['show'];
+type Keyed = Parameters<typeof cellsOf>[1] & { sort_value: string; sort_id: string };
+
+/** Rows read at once: one short transaction each, so a slow reader holds nothing open. */
+const atOnce = 1000;
+
+/** Gives out a whole list, however long, without ever holding more than a page of it. */
+export async function exportList(
+  context: Context,
+  kind: keyof typeof exportedLists,
+  show: Show,
+): Promise<RawReply> {
+  const list = exportedLists[kind];
+  const { shop, today } = await withTenant(context, async () => ({
+    shop: await shopFacts(context),
+    today: await tradeDayNow(context),
+  }));
+  // Read before anything is sent, so that trouble with the database is still a problem document.
+  const first = await nextRows(context, list, show, undefined);
+  return new RawReply(async (response) => {
+    response
+      .status(200)
+      .set('Content-Disposition', `attachment; filename="${kind}-${today}.csv"`)
+      .type('text/csv; charset=utf-8');
+    await send(response, csvStart + csvRow(list.headers));
+    for (let found = first; ;) {
+      await send(response, text(list, found, shop));
+      const last = found.at(-1);
+      if (found.length < atOnce || !last || response.destroyed) break;
+      found = await nextRows(context, list, show, last);
+    }
+    response.end();
+  });
+}
+
+function nextRows(
+  context: Context,
+  list: ExportedList,
+  show: Show,
+  after: Keyed | undefined,
+): Promise<Keyed[]> {
+  const { column, type } = list.sort;
+  return withTenant(context, () =>
+    rows<Keyed>(
+      `${list.select.replace(/^select/, `select ${column}::text as sort_value, ${list.id} as sort_id,`)}
+       where ${[
+         `${list.shopColumn} = $shopId`,
+         ...shown(show, list.ended),
+         ...(after ? [`(${column}, ${list.id}) > ($value::${type}, $id::uuid)`] : []),
+       ].join(' and ')}
+       order by ${column}, ${list.id} limit ${atOnce}`,
+      {
+        shopId: context.shopId,
+        ...(after ? { value: after.sort_value, id: after.sort_id } : {}),
+      },
+    ),
+  );
+}
+
+function text(list: ExportedList, found: Keyed[], shop: ShopFacts): string {
+  return found.map((row) => csvRow(cellsOf(list, row, shop))).join('');
+}
+
+/** Waits while the reader is slower than the database; a reader who left ends the waiting. */
+async function send(response: Response, chunk: string): Promise<void> {
+  if (response.destroyed || response.write(chunk)) return;
+  await Promise.race([once(response, 'drain'), once(response, 'close')]);
+}
