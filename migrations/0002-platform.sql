@@ -52,6 +52,9 @@ create table subscriptions (
   current_period_ends_at timestamptz,
   card_customer text,
   card_subscription text unique,
+  -- A card page somebody was sent to and whose end we have not heard of; the sweep asks after it.
+  card_checkout text,
+  card_checked_at timestamptz,
   version integer not null default 1,
   created_at timestamptz not null default now(),
   updated_at timestamptz not null default now(),

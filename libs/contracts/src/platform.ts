@@ -104,7 +104,7 @@ export const platformOperations = defineOperations({
     body: why,
     answer: platformShopPage,
     status: 200,
-    problems: ['conflict'],
+    problems: ['conflict', 'card-payment-failed'],
   },
   'platform.resume': {
     method: 'POST',
@@ -116,7 +116,7 @@ export const platformOperations = defineOperations({
     body: why,
     answer: platformShopPage,
     status: 200,
-    problems: ['conflict'],
+    problems: ['conflict', 'card-payment-failed'],
   },
   'platform.cancel': {
     method: 'POST',
