@@ -55,7 +55,7 @@ export async function payWhatIsDue(shop: DemoShop, day: DateTime): Promise<void>
         amount: latest.open,
         receivedOn: day.toISODate() as string,
         method: payer === 'late' ? 'cheque' : 'transfer',
-        words: latest.reference,
+        words: `Statement ${latest.name}`,
       },
     });
   }

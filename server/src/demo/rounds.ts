@@ -1,6 +1,7 @@
 import { type DateTime } from 'luxon';
 import { systemContext } from '../core/context';
-import { sweepRounds } from '../features/contracts/sweep-rounds';
+import { withTenant, write } from '../core/database/tenancy';
+import { planRounds as planDueRounds } from '../features/contracts/plan-rounds';
 import { ask } from './ask';
 import { type DemoShop } from './set-up';
 
@@ -23,10 +24,17 @@ export async function addContracts(shop: DemoShop, first: DateTime): Promise<voi
       },
     });
   }
+  // Rounds are planned from the day a contract was agreed on, which is not today.
+  await withTenant(office, () =>
+    write('update contracts set created_at = $agreed where shop_id = $shopId', {
+      shopId: shop.id,
+      agreed: office.now,
+    }),
+  );
 }
 
 /** What the worker's sweep would have planned by this day. */
 export async function planRounds(shop: DemoShop, day: DateTime): Promise<void> {
   if (day.weekday !== 1 && day.day !== 1) return;
-  await sweepRounds(systemContext(shop.id, day.set({ hour: 5 }).toJSDate()));
+  await planDueRounds(systemContext(shop.id, day.set({ hour: 5 }).toJSDate()));
 }
