@@ -26,6 +26,8 @@ export interface MailSession {
   close(): void;
 }
 
+type SmtpError = Error & { responseCode?: number };
+
 /** A conversation with the mail server that carries several mails, opened again when it broke. */
 export function mailSession(options: { smtpUrl: string; from: string }): MailSession {
   let connection: SMTPConnection | undefined;
@@ -48,19 +50,25 @@ export function mailSession(options: { smtpUrl: string; from: string }): MailSes
       }
     }
     const open = connection;
-    return new Promise((resolve) => {
-      // A connection that breaks reports it as an event; only the first answer counts.
-      const broken = (error: Error) => resolve(ended(error));
-      open.once('error', broken);
-      open.once('end', () => broken(new Error('The mail server hung up')));
-      open.send({ from: fromAddress, to: [mail.to.address] }, message, (error) => {
-        open.off('error', broken);
-        resolve(error ? ended(error) : { outcome: 'sent' });
-      });
+    const error = await new Promise<SmtpError | undefined>((resolve) => {
+      // A connection that breaks reports it as an event; only the first answer counts, and giving the
+      // connection up makes events of its own.
+      const stop = (found?: SmtpError) => {
+        open.off('error', stop);
+        open.off('end', hungUp);
+        resolve(found);
+      };
+      const hungUp = () => stop(new Error('The mail server hung up'));
+      open.once('error', stop);
+      open.once('end', hungUp);
+      open.send({ from: fromAddress, to: [mail.to.address] }, message, (refused) =>
+        stop(refused ?? undefined),
+      );
     });
+    return error ? ended(error) : { outcome: 'sent' };
   }
 
-  function ended(error: Error & { responseCode?: number }): HandedOver {
+  function ended(error: SmtpError): HandedOver {
     close();
     const code = error.responseCode ?? 0;
     if (code >= 500) return { outcome: 'failed', error: describe(error) };
