@@ -1,5 +1,5 @@
 import { passwordMatches } from '../../core/auth/password';
-import { Problem, problem } from '../../core/problems/problem';
+import { type Problem, problem } from '../../core/problems/problem';
 import { takeCode } from './one-time-code';
 import { type Person, personByEmail } from './people';
 import { countTry, forgetTries, giveTryBack, type TryKey } from './sign-in-failures';
