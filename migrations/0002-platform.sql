@@ -330,7 +330,8 @@ create table idempotency_keys (
   operation text not null,
   fingerprint text not null,
   status integer,
-  answer jsonb,
+  -- Not jsonb: a repeat gets the first answer letter for letter.
+  answer json,
   created_at timestamptz not null default now(),
   primary key (shop_id, id),
   unique (shop_id, membership_id, key)

@@ -4,6 +4,7 @@ import { enqueueNow } from '../../core/jobs/boss';
 import { type Job } from '../../core/jobs/work';
 import { type Log } from '../../core/logging';
 import { sweepDeliveries } from '../deliveries/send-deliveries';
+import { sweepImports } from '../imports/work-import';
 import { sweepPayments } from '../payments/sweep-payments';
 import { sweepStripeEvents } from '../payments/work-stripe-event';
 import { sweepPlatformMails } from '../platform-mails/send-platform-mails';
@@ -37,6 +38,7 @@ export function sweepShop(context: Context, log: Log): Promise<void> {
       ['deliveries', () => sweepDeliveries(context)],
       ['payments', () => sweepPayments(context, log)],
       ['rounds', () => wakeRounds(context)],
+      ['imports', () => sweepImports(context)],
       ['old keys', () => forgetOldKeys(context)],
     ],
     log.child({ shopId: context.shopId }),
