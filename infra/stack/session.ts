@@ -53,6 +53,7 @@ export async function runAtKeyboard(
     stop(0).then(undefined, reportAndExit);
   };
   for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(name, onSignal);
+  whenParentIsGone(onSignal);
   // A closed terminal must not keep the rest from ending in order.
   process.stdout.on('error', () => undefined);
 
@@ -67,6 +68,18 @@ export async function runAtKeyboard(
     rmSync(lock, { force: true });
     throw error;
   }
+}
+
+/** npm may be killed without a word to us; then nobody is left who could press Ctrl-C. */
+function whenParentIsGone(leave: () => void): void {
+  if (!process.env.npm_lifecycle_event) return;
+  const parent = process.ppid;
+  const timer = setInterval(() => {
+    if (process.ppid === parent) return;
+    clearInterval(timer);
+    leave();
+  }, 500);
+  timer.unref();
 }
 
 /** A path as one would type it from here, when that is shorter. */
