@@ -29,6 +29,7 @@ import { WordsField } from './words-field';
     <tw-words-field label="Note" [control]="note" hint="Only the shop sees it" />
     <tw-amount-field label="Cost" [control]="cost" />
     <tw-percent-field label="Markup" [control]="markup" />
+    <tw-percent-field class="fine" label="Tax" fine [control]="tax" />
     <tw-distance-field label="How far" [control]="metres" />
     <tw-number-field label="Volts" unit="V" [control]="volts" />
     <tw-select-field label="Place" none="Anywhere" [options]="places" [control]="place" />
@@ -40,6 +41,7 @@ class FieldsHost {
   readonly note = new FormControl('', { nonNullable: true });
   readonly cost = new FormControl<number | null>(1250);
   readonly markup = new FormControl<number | null>(4000);
+  readonly tax = new FormControl<number | null>(0);
   readonly metres = new FormControl<number | null>(16093);
   readonly volts = new FormControl<number | null>(120);
   readonly place = new FormControl('', { nonNullable: true });
@@ -83,9 +85,9 @@ describe('fields', () => {
   it('give the form whole small units', async () => {
     const { form, type } = await host();
     await type('tw-amount-field', '96,5');
-    await type('tw-percent-field', '8.875');
+    await type('tw-percent-field', '8.25');
     await type('tw-distance-field', '');
-    expect([form.cost.value, form.markup.value, form.metres.value]).toEqual([9650, 887.5, null]);
+    expect([form.cost.value, form.markup.value, form.metres.value]).toEqual([9650, 825, null]);
   });
 
   it('write an amount out when it is left', async () => {
@@ -100,6 +102,14 @@ describe('fields', () => {
     expect(field('tw-amount-field').value).toBe('12.345');
     expect(form.cost.invalid).toBe(true);
     expect(root.textContent).toContain('Write an amount like 12.50.');
+  });
+
+  it('take parts of a basis point only where that is asked for', async () => {
+    const { form, type } = await host();
+    await type('tw-percent-field', '8.875');
+    expect(form.markup.errors).toEqual({ measure: 'Write a rate like 8.25.' });
+    await type('tw-percent-field.fine', '8.875');
+    expect(form.tax.value).toBe(887.5);
   });
 
   it('show an error once the field was touched, also from outside', async () => {

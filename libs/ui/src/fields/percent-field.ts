@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { booleanAttribute, ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { type FormControl } from '@angular/forms';
 import { fieldParts } from './field-parts';
 import { PercentInput } from './percent-input';
@@ -11,7 +11,7 @@ import { PercentInput } from './percent-input';
   template: `
     <mat-form-field subscriptSizing="dynamic">
       <mat-label>{{ label() }}</mat-label>
-      <input matInput class="num" twPercent [formControl]="control()" />
+      <input matInput class="num" twPercent [fine]="fine()" [formControl]="control()" />
       <span matTextSuffix>&nbsp;%</span>
       @if (hint(); as text) {
         <mat-hint>{{ text }}</mat-hint>
@@ -25,4 +25,6 @@ export class PercentField {
   readonly label = input.required<string>();
   readonly control = input.required<FormControl<number | null>>();
   readonly hint = input<string>();
+  /** Takes parts of a basis point, as taxes have them: "8.875". */
+  readonly fine = input(false, { transform: booleanAttribute });
 }

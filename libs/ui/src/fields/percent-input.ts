@@ -1,4 +1,4 @@
-import { Directive } from '@angular/core';
+import { booleanAttribute, Directive, input } from '@angular/core';
 import { MeasureInput, measureProviders } from './measure-input';
 import { basisPointsFrom, percentText } from './measures';
 
@@ -8,8 +8,12 @@ import { basisPointsFrom, percentText } from './measures';
   providers: measureProviders(() => PercentInput),
 })
 export class PercentInput extends MeasureInput {
+  /** Takes parts of a basis point, as taxes have them: "8.875". */
+  readonly fine = input(false, { transform: booleanAttribute });
+
   protected override valueOf(text: string): number | undefined {
-    return basisPointsFrom(text);
+    const points = basisPointsFrom(text);
+    return this.fine() || Number.isInteger(points) ? points : undefined;
   }
 
   protected override textOf(value: number): string {
@@ -17,6 +21,6 @@ export class PercentInput extends MeasureInput {
   }
 
   protected override expected(): string {
-    return 'Write a rate like 8.25.';
+    return this.fine() ? 'Write a rate like 8.875.' : 'Write a rate like 8.25.';
   }
 }
