@@ -1,5 +1,5 @@
 import { type SignedInContext } from '../../core/context';
-import { platformRows } from '../../core/database/tenancy';
+import { platformRow, platformRows } from '../../core/database/tenancy';
 import { type AnswerOf } from '../../core/http/route';
 
 /** Where the person is signed in, the newest use first. */
@@ -24,4 +24,14 @@ export async function listDevices(context: SignedInContext): Promise<AnswerOf<'s
       current: session.id === context.sessionId,
     })),
   };
+}
+
+export async function sessionLives(
+  context: Pick<SignedInContext, 'userId' | 'sessionId'>,
+): Promise<boolean> {
+  const session = await platformRow(
+    'select 1 from sessions where id = $sessionId and user_id = $userId and ended_at is null',
+    { userId: context.userId, sessionId: context.sessionId },
+  );
+  return session !== undefined;
 }
