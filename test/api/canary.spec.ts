@@ -66,9 +66,14 @@ function tablesFor(name: string): string[] {
   return known.length ? known : [...canary.ids.keys()];
 }
 
-function askFor(operation: Operation, id: (name: string) => string, seed: number): Ask {
+function askFor(
+  operation: Operation,
+  id: (name: string) => string,
+  seed: number,
+  mark = 'one',
+): Ask {
   const random = seeded(seed);
-  const options = { random, id, optional: 1 };
+  const options = { random, id, mark, optional: 1 };
   const params = schemaOf(operation.params);
   const query = schemaOf(operation.query);
   const body = schemaOf(operation.body);
@@ -91,6 +96,7 @@ function told(answer: Response, ids: string[]): string {
   for (const id of ids) text = text.replaceAll(id, '<id>');
   return `${answer.status} ${text
     .replace(/"requestId":"[^"]*"/g, '')
+    .replaceAll(/one"|two"/g, '<mark>"')
     .replace(/[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[0-9a-f]{4}-[0-9a-f]{12}/g, '<made id>')
     .replace(/\d{4}-\d\d-\d\dT[\d:.]+Z/g, '<time>')}`;
 }

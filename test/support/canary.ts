@@ -242,6 +242,14 @@ export async function buildCanary(): Promise<Canary> {
     received_on: '2031-06-02',
     words: canaryWord,
   });
+  await add('refunds', {
+    ...here,
+    payment_id,
+    amount: 1,
+    refunded_on: '2031-06-03',
+    words: canaryWord,
+  });
+  await add('closures', {});
   await add('allocations', { client_id, payment_id, statement_id, amount: 100 });
   await add('audit', { what: canaryWord, by_name: canaryWord });
   await add('consents', { given_by: person.userId, until: now });

@@ -30,6 +30,8 @@ export interface SampleOptions {
   random: Random;
   /** What stands where an id is asked for; gets the name of its field. */
   id: (name: string) => string;
+  /** Ends each free text, so that two otherwise equal bodies do not collide; three letters. */
+  mark?: string;
   /** How likely a field that may be left out is there. */
   optional?: number;
 }
@@ -101,7 +103,7 @@ function sampleText(schema: JsonSchema, options: SampleOptions, name: string): s
     return fc.sample(arbitrary, { numRuns: 1, seed: random.below(2 ** 31) })[0] as string;
   }
   const length = Math.max(schema.minLength ?? 1, Math.min(schema.maxLength ?? 12, 12));
-  return Array.from({ length }, () => random.pick([...'abcdefghij mnoprst']))
-    .join('')
-    .replace(/^ | $/g, 'x');
+  const text = Array.from({ length }, () => random.pick([...'abcdefghij mnoprst'])).join('');
+  const marked = options.mark && length > 6 ? text.slice(0, -3) + options.mark : text;
+  return marked.replace(/^ | $/g, 'x');
 }

@@ -2,6 +2,7 @@ import { type DateTime } from 'luxon';
 import { systemContext } from '../core/context';
 import { withTenant, write } from '../core/database/tenancy';
 import { finishRun } from '../features/statements/finish-run';
+import { moveRun } from '../features/statements/move-run';
 import { ask } from './ask';
 import { type DemoShop } from './set-up';
 
@@ -33,6 +34,7 @@ export async function closeMonthsDue(
       { shopId: shop.id, now },
     ),
   );
+  await moveRun(systemContext(shop.id, now), run.id, []);
 }
 
 /** Transfers arrive as each store's owner is used to pay. */
