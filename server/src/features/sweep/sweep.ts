@@ -8,6 +8,7 @@ import { sweepImports } from '../imports/work-import';
 import { sweepPayments } from '../payments/sweep-payments';
 import { sweepStripeEvents } from '../payments/work-stripe-event';
 import { sweepPlatformMails } from '../platform-mails/send-platform-mails';
+import { sweepSignIn } from '../sign-up/sweep-sign-in';
 import { sweepStatements } from '../statements/sweep-statements';
 import { sweepSubscriptions } from '../subscription/sweep-subscriptions';
 
@@ -23,6 +24,7 @@ export async function sweep(now: Date, log: Log): Promise<void> {
       ['platform mails', sweepPlatformMails],
       ['card payment events', sweepStripeEvents],
       ['subscriptions', () => sweepSubscriptions(now, log)],
+      ['sign-in', sweepSignIn],
     ],
     log,
   );
