@@ -1,6 +1,6 @@
-import bcrypt from 'bcryptjs';
 import { v7 as uuid } from 'uuid';
 import { type Role } from '@lib/contracts';
+import { hashPassword } from '../core/auth/password';
 import { type Context } from '../core/context';
 import { platformRows } from '../core/database/tenancy';
 
@@ -36,7 +36,7 @@ export function addressOf(name: string, shopName: string): string {
 }
 
 async function addUser(name: string, email: string, admin: boolean): Promise<string> {
-  hash ??= await bcrypt.hash(demoPassword, 10);
+  hash ??= await hashPassword(demoPassword, 12);
   const [user] = await platformRows<{ id: string }>(
     `insert into users (id, email, name, password_hash, email_verified_at, platform_admin)
      values ($id, $email, $name, $hash, now(), $admin)
