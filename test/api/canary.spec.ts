@@ -155,7 +155,7 @@ describe('a foreign shop', () => {
             return id;
           };
           const foreign = askFor(operation, canaryId, variant);
-          const nothing = askFor(operation, absentId, variant);
+          const nothing = askFor(operation, absentId, variant, 'two');
           const [one, other] = [
             await caller.call(id as OperationId, foreign),
             await caller.call(id as OperationId, nothing),
