@@ -46,7 +46,7 @@ export interface CallRequest {
 export function requestOf(id: OperationId, sent: AnySent = {}): CallRequest {
   const [method, path, keyed]: Route = routes[id];
   let headers = new HttpHeaders();
-  if (keyed) headers = headers.set('Idempotency-Key', sent.key ?? v7());
+  if (keyed || sent.key) headers = headers.set('Idempotency-Key', sent.key ?? v7());
   if (sent.ifMatch !== undefined) headers = headers.set('If-Match', `"${sent.ifMatch}"`);
   return {
     method,

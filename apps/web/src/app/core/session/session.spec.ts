@@ -107,6 +107,24 @@ describe('Session', () => {
     expect(await answers).toEqual([{ items: [] }, { items: [] }]);
   });
 
+  it('asks again under the same key when an answer to renewing got lost', async () => {
+    await signedIn();
+    const renew = async (answer: 'lost' | 'given') => {
+      const renewing = session.renew(session.token()).catch(() => undefined);
+      await settled();
+      const call = server.expectOne('/api/session/refresh');
+      if (answer === 'lost') call.error(new ProgressEvent('error'));
+      else call.flush(anAnswer({ accessToken: `token after ${session.token()}` }));
+      await renewing;
+      return call.request.headers.get('Idempotency-Key');
+    };
+    const first = await renew('lost');
+    expect(first).toMatch(/^[0-9a-f-]{36}$/);
+    expect(await renew('lost')).toBe(first);
+    expect(await renew('given')).toBe(first);
+    expect(await renew('given')).not.toBe(first);
+  });
+
   it('repeats a call under the same Idempotency-Key', async () => {
     await signedIn();
     const api = TestBed.inject(Api);

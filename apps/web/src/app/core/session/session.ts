@@ -3,6 +3,7 @@ import { computed, effect, inject, Injectable, signal } from '@angular/core';
 import { type BodyOf, type Permission } from '@lib/contracts/web';
 import { Reading } from '@lib/ui/format/reading';
 import { firstValueFrom } from 'rxjs';
+import { v7 } from 'uuid';
 import { Api } from '../api/api';
 import { isProblem } from '../api/problem';
 import { LocalKeepings } from './leaving';
@@ -24,6 +25,8 @@ export class Session {
   readonly #reading = inject(Reading);
   readonly #now = signal<Snapshot | undefined>(undefined);
   #token: string | undefined;
+  /** Kept until the server has answered, which may have traded the cookie and been cut off. */
+  #refreshKey: string | undefined;
   #started: Promise<void> | undefined;
   #renewing: Promise<string | undefined> | undefined;
 
@@ -125,11 +128,15 @@ export class Session {
   }
 
   async #refresh(): Promise<string | undefined> {
+    this.#refreshKey ??= v7();
     try {
-      this.take(await firstValueFrom(this.#api.callWith(bare(), 'session.refresh')));
+      const key = this.#refreshKey;
+      this.take(await firstValueFrom(this.#api.callWith(bare(), 'session.refresh', { key })));
+      this.#refreshKey = undefined;
       return this.#token;
     } catch (error) {
       if (isProblem(error) && error.unanswered) throw error;
+      this.#refreshKey = undefined;
       this.#end();
       return undefined;
     }
