@@ -87,7 +87,7 @@ describe('repair under shop warranty', () => {
   });
 
   it('is recorded act by act', async () => {
-    const [first, second, third] = scene.machines as [never, never, never];
+    const [first, , third] = scene.machines as [never, never, never];
     const valve = await buildPart(scene.shop, { category: 'inlet', unit_cost: 20_00 });
     const lock = await buildPart(scene.shop, { category: 'door', unit_cost: 35_00 });
     const phone = new Phone();

@@ -75,7 +75,7 @@ export interface CaseJob {
   markWords: string;
   markedBy: string;
   causedByJobId: string | null;
-  /** What an hour of whoever worked on it costs the shop. */
+  /** What an hour of whoever worked on it costs the shop; where not known, of the visit's tech. */
   costPerHour: number;
 }
 
@@ -86,10 +86,12 @@ export function jobsToRule(context: Context, visitId: string): Promise<CaseJob[]
        j.finding_code as "findingCode", j.category, j.cause, j.action, j.result, j.minutes,
        j.after_hours_minutes as "afterHoursMinutes", j.access_minutes as "accessMinutes",
        j.warranty_mark as mark, j.mark_words as "markWords", j.marked_by as "markedBy",
-       j.caused_by_job_id as "causedByJobId", coalesce(p.cost_per_hour, 0) as "costPerHour"
+       j.caused_by_job_id as "causedByJobId", coalesce(p.cost_per_hour, t.cost_per_hour, 0) as "costPerHour"
      from jobs j
      join machines m on m.shop_id = j.shop_id and m.id = j.machine_id
+     join visits v on v.shop_id = j.shop_id and v.id = j.visit_id
      left join crew_profiles p on p.shop_id = j.shop_id and p.membership_id = j.membership_id
+     left join crew_profiles t on t.shop_id = v.shop_id and t.membership_id = v.tech_membership_id
      where j.shop_id = $shopId and j.visit_id = $visitId order by j.position`,
     { shopId: context.shopId, visitId },
   );

@@ -117,12 +117,15 @@ describe('what an act does to the record of a visit', () => {
   });
 
   it('takes minutes as all so far, and whose they are', () => {
-    const { record } = project([
+    const acts = [
       opened(),
       actAt(2, 'minutes', { jobId, minutes: 20 }),
       actAt(3, 'minutes', { jobId, minutes: 35 }, zoe),
-    ]);
-    expect(jobOf(record)).toMatchObject({ minutes: 35, membershipId: zoe.membershipId });
+    ];
+    const fromTheOffice = project(acts).record;
+    expect(jobOf(fromTheOffice)).toMatchObject({ minutes: 35, membershipId: imre.membershipId });
+    const there = project([actAt(0, 'arrived', {}, zoe), ...acts]).record;
+    expect(jobOf(there)).toMatchObject({ minutes: 35, membershipId: zoe.membershipId });
   });
 
   it('opens one job on a machine', () => {

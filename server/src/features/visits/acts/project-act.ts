@@ -118,11 +118,11 @@ const appliers: { [K in ActKind]: Apply<K> } = {
     }),
 
   minutes: (situation) =>
-    onJob(situation, (job, { payload, dated }) => {
+    onJob(situation, (job, { record, payload, dated }) => {
       job.minutes = payload.minutes;
       job.afterHoursMinutes = payload.afterHoursMinutes;
       job.accessMinutes = payload.accessMinutes;
-      job.membershipId = dated.by.membershipId;
+      workedBy(record, job, dated);
       return undefined;
     }),
 
@@ -190,7 +190,7 @@ const appliers: { [K in ActKind]: Apply<K> } = {
       job.testCycles = payload.cycles;
       job.testCoins = payload.coins;
       job.testAmount = payload.amount;
-      job.membershipId = dated.by.membershipId;
+      workedBy(record, job, dated);
       leave(record, job, dated, { result: 'nothing_found', state: 'up' });
       return undefined;
     }),
@@ -282,6 +282,12 @@ function newJob(payload: PayloadOf<'job_opened'>, dated: DatedAct): JobRecord {
     openedAt: dated.at,
     doneAt: null,
   };
+}
+
+/** The minutes are those of whoever was there; the office that puts them right only wrote them down. */
+function workedBy(record: VisitRecord, job: JobRecord, { by }: DatedAct): void {
+  const there = record.times.some((time) => time.membershipId === by.membershipId);
+  if (there) job.membershipId = by.membershipId;
 }
 
 function leave(
