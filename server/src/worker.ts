@@ -1,6 +1,7 @@
 import { createServer } from 'node:http';
 import express from 'express';
 import { readConfig } from './core/config';
+import { whenDatabaseAnswers } from './core/database/away';
 import { health } from './core/http/health';
 import { serveMetrics } from './core/http/metrics';
 import { jobs } from './core/jobs/boss';
@@ -18,10 +19,10 @@ async function main(): Promise<void> {
   app.use(health());
   app.get('/metrics', serveMetrics());
   const server = createServer(app).listen(config.workerPort, config.host);
-  await jobs().schedule('sweep', '* * * * *', {});
+  await whenDatabaseAnswers(log, () => jobs().schedule('sweep', '* * * * *', {}));
   await startWork(jobHandlers, { config, log });
   // Whatever fell due while no worker ran is found now, not in up to a minute.
-  await jobs().send('sweep', {}, { singletonKey: 'sweep' });
+  await whenDatabaseAnswers(log, () => jobs().send('sweep', {}, { singletonKey: 'sweep' }));
   log.info('worker ready');
   closeOnSignal(log, async () => {
     server.close();

@@ -1,4 +1,5 @@
 import { type Config, useConfig } from './config';
+import { whenDatabaseAnswers } from './database/away';
 import { closeDatabase, openDatabase } from './database/database';
 import { diskFileStore, useFileStore } from './files/file-store';
 import { closeJobs, openJobs } from './jobs/boss';
@@ -11,7 +12,9 @@ export async function openServices(config: Config, log: Log, kind: 'web' | 'work
   openDatabase({ ...config.database });
   useFileStore(diskFileStore(config.filesDir));
   openStripe(config.card);
-  await openJobs({ url: config.database.directUrl, log, worker: kind === 'worker' });
+  await whenDatabaseAnswers(log, () =>
+    openJobs({ url: config.database.directUrl, log, worker: kind === 'worker' }),
+  );
   return async () => {
     await closeJobs();
     await closeDatabase();

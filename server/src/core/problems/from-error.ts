@@ -1,3 +1,4 @@
+import { databaseIsAway } from '../database/away';
 import { Problem, problem } from './problem';
 
 interface PgError {
@@ -17,7 +18,6 @@ export function problemFromError(error: unknown): Problem {
 }
 
 function fromDatabase(error: unknown): Problem | undefined {
-  const name = (error as { name?: string }).name ?? '';
   const original = (error as { original?: PgError }).original;
   switch (original?.code) {
     case '23505':
@@ -42,12 +42,9 @@ function fromDatabase(error: unknown): Problem | undefined {
       return problem('invalid-request', 'A number is too large.');
     case '40001':
     case '40P01':
-    case '57P01':
-    case '57P03':
-    case '53300':
       return problem('unavailable');
   }
-  return name.includes('Connection') ? problem('unavailable') : undefined;
+  return databaseIsAway(error) ? problem('unavailable') : undefined;
 }
 
 function fromHttp(error: HttpError): Problem | undefined {

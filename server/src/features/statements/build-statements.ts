@@ -1,9 +1,9 @@
 import { tradeDayOf } from '@lib/domain';
 import { systemContext, type Context } from '../../core/context';
+import { databaseIsAway } from '../../core/database/away';
 import { row, rows, withTenant, write } from '../../core/database/tenancy';
 import { type Job } from '../../core/jobs/work';
 import { type Log } from '../../core/logging';
-import { problemFromError } from '../../core/problems/from-error';
 import { type ShopFacts, shopFacts } from '../../core/shop-facts';
 import { type RunFacts, buildStatementOfStore } from './build-statement-of-store';
 import { monthsToState } from './fees-due';
@@ -90,7 +90,7 @@ async function buildOne(
     return (await buildStatementOfStore(context, shop, run, storeId)) !== undefined;
   } catch (error) {
     // Without a database nothing can be written down either: the whole job is tried again.
-    if (problemFromError(error).type === 'unavailable') throw error;
+    if (databaseIsAway(error)) throw error;
     log.error({ err: error, storeId }, 'a statement could not be built');
     await noteFailure(context, run.id, storeId, error);
     return false;

@@ -1,6 +1,7 @@
 import { v7 as uuid } from 'uuid';
 import { type Config } from '../../core/config';
 import { type Context, systemContext } from '../../core/context';
+import { databaseIsAway } from '../../core/database/away';
 import { withTenant, write } from '../../core/database/tenancy';
 import { render } from '../../core/documents/render-pool';
 import { files } from '../../core/files/file-store';
@@ -16,7 +17,7 @@ import { type StoredSnapshot } from './stored-snapshot';
 
 const batch = 20;
 /** Longer than rendering a batch may take; after it another attempt takes over. */
-const leaseSeconds = 60;
+const leaseSeconds = 20;
 const mostTries = 3;
 
 interface Claimed {
@@ -85,6 +86,7 @@ async function renderOne(
     const sha256 = await files().put(context.shopId, pdf);
     await withTenant(context, () => keep(context, statement, sha256, pdf.length, config));
   } catch (error) {
+    if (databaseIsAway(error)) throw error;
     log.error({ err: error, statementId: statement.statementId }, 'a statement was not rendered');
     await withTenant(context, () =>
       write(
