@@ -1,7 +1,8 @@
-import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { AreaFrame } from '../core/frame/area-frame';
 import { type NavItem } from '../core/frame/nav-item';
 import { areas } from '../core/navigation/areas';
+import { Sender } from './outbox/sender';
 
 @Component({
   selector: 'tw-field-frame',
@@ -17,6 +18,12 @@ export class FieldFrame {
     'No signal. What you record is kept here and sent when there is one.';
   protected readonly items: readonly NavItem[] = [
     { label: 'Day', link: '/field/day' },
+    { label: 'Entries', link: '/field/outbox' },
     { label: 'Account', link: '/account' },
   ];
+
+  constructor() {
+    // Sends what waits for as long as the area is open.
+    inject(Sender);
+  }
 }

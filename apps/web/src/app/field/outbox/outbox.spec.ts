@@ -125,7 +125,6 @@ describe('the outbox', () => {
   it('sends by itself, tries again after no answer, and shows since when', async () => {
     const outbox = start();
     const sender = TestBed.inject(Sender);
-    TestBed.runInInjectionContext(() => sender.start());
     api.call.mockReturnValueOnce(throwError(() => new Problem('no-answer', 0, 'No answer')));
     await outbox.record('visit', 'arrived', {});
     TestBed.tick();

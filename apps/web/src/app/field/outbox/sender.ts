@@ -32,8 +32,7 @@ export class Sender {
   /** Since when the server has not answered. */
   readonly quietSince = signal<string | undefined>(undefined);
 
-  /** Sends from now on; called by the frame of the area. */
-  start(): void {
+  constructor() {
     effect(() => {
       if (this.#outbox.added() > 0) untracked(() => this.#wake(gathering));
     });
