@@ -1,3 +1,4 @@
+import { once } from 'node:events';
 import { type Server, Agent, request as httpRequest } from 'node:http';
 import { type AddressInfo } from 'node:net';
 import { type Operation, operations, storesAnswer } from '@lib/contracts';
@@ -26,6 +27,7 @@ const agent = new Agent({ keepAlive: true, maxSockets: atOnce });
 beforeAll(async () => {
   server = await startTestServer();
   listening = server.app.listen(0, '127.0.0.1');
+  await once(listening, 'listening');
   port = (listening.address() as AddressInfo).port;
   const shop = await buildShop();
   const laundry = await buildLaundry(shop);
@@ -106,7 +108,10 @@ function build(
   const query = schemas.query ? spoil(sample(schemas.query, options), random) : {};
   const words = new URLSearchParams();
   for (const [name, value] of Object.entries((query ?? {}) as object))
-    words.append(name, String(value).slice(0, 3000));
+    words.append(
+      name,
+      (typeof value === 'object' ? JSON.stringify(value) : String(value)).slice(0, 3000),
+    );
   const headers: Record<string, string> = {};
   const token =
     operation.permission === 'public' ? undefined : tokens[random.chance(0.8) ? 'shop' : 'client'];

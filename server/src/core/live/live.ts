@@ -61,6 +61,9 @@ export function listenForChanges(url: string, log: Log): { close(): Promise<void
   };
 }
 
+/** After so long a stream ends and the browser asks again, so that its right is looked at anew. */
+const longestStream = 10 * 60_000;
+
 /** Keeps an answer open and writes each change the person may know of (Server-Sent Events). */
 export function followChanges(context: Context, response: Response): void {
   response.status(200).set({
@@ -77,9 +80,11 @@ export function followChanges(context: Context, response: Response): void {
     );
   };
   const beat = setInterval(() => response.write(': still here\n\n'), 20_000);
+  const end = setTimeout(() => response.end(), longestStream).unref();
   changes.on('change', onChange);
   response.on('close', () => {
     clearInterval(beat);
+    clearTimeout(end);
     changes.off('change', onChange);
   });
 }
