@@ -11,7 +11,7 @@ import { checkRoutes } from './core/http/check-routes';
 import { health } from './core/http/health';
 import { serveMetrics, timeOperation } from './core/http/metrics';
 import { problemHandler } from './core/http/problem-handler';
-import { limitRate, securityHeaders } from './core/http/security';
+import { limitGuesses, limitRate, securityHeaders } from './core/http/security';
 import { serveRoute } from './core/http/serve-route';
 import { webFiles } from './core/http/web-files';
 import { type Log } from './core/logging';
@@ -57,7 +57,7 @@ export function createApp(config: Config, log: Log): Express {
     response.type('application/json').send(document);
   });
 
-  const signInLimit = limitRate(config.signInRateLimit);
+  const signInLimit = limitGuesses(config.signInRateLimit);
   for (const route of routes) {
     const { operation } = route;
     const method = operation.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';

@@ -171,6 +171,15 @@ describe('signing in', () => {
     }
   });
 
+  it('keeps one session a browser: signing in again ends the one before', async () => {
+    const person = await owner();
+    const tab = browser();
+    await tab.call('session.signIn', { body: credentials(person) });
+    const again = await tab.call('session.signIn', { body: credentials(person) });
+    const token = again.body.accessToken as string;
+    expect((await tab.call('session.list', { token })).body.items).toHaveLength(1);
+  });
+
   it('asks for a one-time code when they are in force, and takes each code once', async () => {
     const person = await owner();
     const tab = browser();

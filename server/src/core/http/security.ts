@@ -1,5 +1,5 @@
 import { type RequestHandler } from 'express';
-import { rateLimit } from 'express-rate-limit';
+import { type Options, rateLimit } from 'express-rate-limit';
 import helmet from 'helmet';
 import { Problem } from '../problems/problem';
 
@@ -33,8 +33,25 @@ export function securityHeaders(): RequestHandler {
 
 /** At most `perMinute` requests from one address; 0 turns it off. */
 export function limitRate(perMinute: number): RequestHandler {
+  return limiter(perMinute, {});
+}
+
+/**
+ * At most `perMinute` guesses from one address. What succeeds by a secret is no guess, so an office
+ * where everybody signs in at eight is not held up; what is taken without one (202) counts.
+ */
+export function limitGuesses(perMinute: number): RequestHandler {
+  return limiter(perMinute, {
+    skipSuccessfulRequests: true,
+    requestWasSuccessful: (_request, response) =>
+      response.statusCode < 400 && response.statusCode !== 202,
+  });
+}
+
+function limiter(perMinute: number, options: Partial<Options>): RequestHandler {
   if (perMinute === 0) return (_request, _response, next) => next();
   return rateLimit({
+    ...options,
     windowMs: 60_000,
     limit: perMinute,
     standardHeaders: 'draft-8',

@@ -4,7 +4,8 @@ import { Strategy } from 'passport-local';
 import { type PublicContext } from '../../core/context';
 import { type InputOf } from '../../core/http/route';
 import { checkCredentials, refused } from './check-credentials';
-import { deviceOf, giveDevice, giveRefreshToken } from './cookies';
+import { deviceOf, giveDevice, giveRefreshToken, refreshTokenOf } from './cookies';
+import { endSessionOf } from './end-session';
 import { type Person } from './people';
 import { type SessionAnswer, sessionAnswer } from './session-answer';
 import { tryKey } from './sign-in-failures';
@@ -18,6 +19,9 @@ export async function signIn(
 ): Promise<SessionAnswer> {
   const key = tryKey(credentials.email, context.source, deviceOf(http.request, credentials.email));
   const person = await byPassword(http, () => checkCredentials(credentials, key, context.now));
+  // The browser keeps one chain: whoever was signed in on it before is not any longer.
+  const before = refreshTokenOf(http.request);
+  if (before) await endSessionOf(before);
   const { sessionId, refreshToken } = await startSession(context, person.id);
   giveRefreshToken(http.response, refreshToken);
   giveDevice(http.response, person.email);
