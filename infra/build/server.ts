@@ -10,6 +10,7 @@ const entries: Record<string, string> = {
   main: 'server/src/main.ts',
   worker: 'server/src/worker.ts',
   migrate: 'server/src/migrate.ts',
+  'add-admin': 'server/src/add-admin.ts',
   demo: 'server/src/demo/seed.ts',
   'pdf-worker': 'server/src/pdf-worker.ts',
 };

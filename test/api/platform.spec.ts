@@ -1,6 +1,7 @@
 import { v7 as uuid } from 'uuid';
 import { type StripeFake, startStripeFake } from '../../infra/fakes/stripe/stripe-fake';
 import { platformRows } from '../../server/src/core/database/tenancy';
+import { addAdmin } from '../../server/src/features/platform/add-admin';
 import { queuePlatformMail } from '../../server/src/features/platform-mails/queue-platform-mail';
 import { api } from '../support/api';
 import { startTestServer, type TestServer } from '../support/app';
@@ -247,6 +248,23 @@ describe('the platform area', () => {
     expect(JSON.stringify(all)).not.toContain('not for the list');
     const worked = await walk(admin, 'platform.cardEvents', { state: 'worked' });
     expect(worked).toEqual([]);
+  });
+
+  it('gets its first admin from whoever runs the installation, by a mail to choose a password', async () => {
+    const email = `first-${uuid().slice(-6)}@platform.example`;
+    expect(await addAdmin(email, 'Fia First')).toBe('added');
+    expect(await addAdmin(email, 'Fia First')).toBe('already');
+    const mails = await platformRows<{ template: string }>(
+      'select template from platform_mails where recipient = $email',
+      { email },
+    );
+    expect(mails.map((mail) => mail.template)).toContain('reset_password');
+    const known = await addAdmin(owner.email, 'Olive Owner');
+    expect(known).toBe('added');
+    const person = await platformRows('select name, platform_admin from users where email = $e', {
+      e: owner.email,
+    });
+    expect(person).toEqual([{ name: 'Olive Owner', platform_admin: true }]);
   });
 
   it('is closed to everybody who is not a platform admin, and reaches into no shop', async () => {

@@ -30,7 +30,11 @@ export async function requestReset(
   return { message };
 }
 
-function mailReset(context: PublicContext, person: Person): Promise<void> {
+/** Mails a link that lets its holder choose a password. */
+export function mailReset(
+  context: Pick<PublicContext, 'now'>,
+  person: Pick<Person, 'id' | 'email' | 'name'>,
+): Promise<void> {
   return withPlatform(async () => {
     const id = uuid();
     await platformRows(
