@@ -61,6 +61,8 @@ describe('acts of a visit', () => {
     const shown = (await as('tech').call('visits.show', { params: { visitId } })).body;
     const again = await send(acts);
     expect(new Set(outcomes(again))).toEqual(new Set(['repeated']));
+    const shouted = acts.map((act) => ({ ...act, id: act.id.toUpperCase() }));
+    expect(new Set(outcomes(await send(shouted)))).toEqual(new Set(['repeated']));
     const left = phone.act('left', {});
     expect(outcomes(await send([...acts.slice(0, 2), left, left]))).toEqual([
       'repeated',

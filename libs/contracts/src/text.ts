@@ -47,7 +47,8 @@ export const phone = z
   .max(40)
   .regex(/^\+?[0-9 ()./-]{3,40}$/, { error: 'is not a telephone number' });
 
-export const id = z.uuid();
+/** Folded to lower case, as the database writes ids: two spellings are one id. */
+export const id = z.uuid().toLowerCase();
 
 /** A secret in a mailed link: 32 random bytes as base64url. */
 export const token = z.string().regex(/^[A-Za-z0-9_-]{43}$/, { error: 'is not a valid token' });

@@ -22,6 +22,7 @@ export {
 } from './ledger/posting';
 export * from './ledger/settlement-postings';
 export * from './ledger/trial-balance';
+export * from './words/symptoms';
 export * from './words/trade';
 export {
   type Integer,

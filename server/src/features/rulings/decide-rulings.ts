@@ -9,7 +9,7 @@ import { found, invalid, problem } from '../../core/problems/problem';
 import { storedRulings } from './decisions';
 import { storeProposals } from './propose-rulings';
 import { presentRulings, ruledVisit, withStandings } from './show-rulings';
-import { type RuledLine } from './visit-case';
+import { type RuledLine } from './ruled-line';
 
 type Shown = AnswerOf<'rulings.confirm'>;
 type Asked = InputOf<'rulings.confirm'>['body']['lines'];

@@ -1,5 +1,5 @@
 import { standingOf, type StoredRuling } from './decisions';
-import { type RuledLine } from './visit-case';
+import { type RuledLine } from './ruled-line';
 
 const line: RuledLine = {
   lineKey: 'job:1:labour',

@@ -2,7 +2,7 @@ import { type Bearer } from '@lib/contracts';
 import { type Reason } from '@lib/domain';
 import { type Context } from '../../core/context';
 import { rows } from '../../core/database/tenancy';
-import { type RuledLine } from './visit-case';
+import { type RuledLine } from './ruled-line';
 
 /** The newest ruling of a line: the rules' proposal, or the owner's word on it. */
 export interface StoredRuling {

@@ -1,12 +1,12 @@
-import { addUp } from '@lib/domain';
-import { otherOutcomes } from '@lib/domain';
+import { addUp, otherOutcomes } from '@lib/domain';
 import { type Context } from '../../core/context';
 import { withTenant } from '../../core/database/tenancy';
 import { type AnswerOf } from '../../core/http/route';
 import { problem } from '../../core/problems/problem';
 import { standingOf, storedRulings, type Standing, type StoredRuling } from './decisions';
 import { type CaseJob } from './read-case';
-import { NoCase, type RuledLine, type VisitCase, visitCase } from './visit-case';
+import { type RuledLine } from './ruled-line';
+import { NoCase, type VisitCase, visitCase } from './visit-case';
 
 type Shown = AnswerOf<'rulings.show'>;
 type ShownLine = Shown['jobs'][number]['lines'][number];

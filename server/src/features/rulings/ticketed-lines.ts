@@ -2,7 +2,7 @@ import { type Bearer } from '@lib/contracts';
 import { type PricedLine, type Reason } from '@lib/domain';
 import { type Context } from '../../core/context';
 import { rows } from '../../core/database/tenancy';
-import { type RuledLine } from './visit-case';
+import { type RuledLine } from './ruled-line';
 
 type LineRow = Omit<PricedLine, 'reasons'> & {
   priceReasons: string[];

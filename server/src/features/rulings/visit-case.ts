@@ -31,13 +31,8 @@ import {
   partsToPrice,
   visitToRule,
 } from './read-case';
+import { type RuledLine } from './ruled-line';
 import { ticketedLines } from './ticketed-lines';
-
-/** A line of the visit with what the rules propose for it, and what both rest on. */
-export interface RuledLine extends PricedLine {
-  proposal: Ruling;
-  basis: string;
-}
 
 /** A visit priced and ruled by its price book, as its acts stand now. */
 export interface VisitCase {

@@ -5,6 +5,7 @@ import {
   type MachineKind,
   type StatedVisit,
 } from '@lib/contracts';
+import { symptomWord } from '@lib/domain';
 import { type Context } from '../../core/context';
 import { rows } from '../../core/database/tenancy';
 import { visitWords } from './visit-words';
@@ -89,6 +90,7 @@ function statedVisit(ticket: TicketFacts, jobs: JobRow[], lines: LineRow[]): Sta
       const borne = ofJob.filter(({ bearer }) => bearer === 'shop' || bearer === 'goodwill');
       return {
         ...job,
+        reported: symptomWord(job.reported),
         borneByShop: borne.reduce((sum, line) => sum + line.list, 0),
         lines: ofJob.map(shown),
       };
