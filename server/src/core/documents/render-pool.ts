@@ -54,7 +54,6 @@ function quietestLane(): Lane {
 function openLane(): Lane {
   const thread = new Worker(threadFile, { resourceLimits: { maxOldGenerationSizeMb: 160 } });
   const lane: Lane = { thread, waiting: new Map() };
-  thread.unref();
   thread.on('message', (result: RenderResult) => {
     const waiting = lane.waiting.get(result.id);
     lane.waiting.delete(result.id);
@@ -69,6 +68,8 @@ function openLane(): Lane {
   };
   thread.on('error', gone);
   thread.on('exit', () => gone(new Error('The thread that renders documents ended')));
+  // After the listeners, which each hold the process again: an idle thread must not keep it alive.
+  thread.unref();
   lanes.push(lane);
   return lane;
 }
