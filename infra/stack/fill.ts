@@ -31,8 +31,9 @@ export async function seed(
   });
 }
 
-async function hasShops(ownerUrl: string): Promise<boolean> {
-  return withClient(ownerUrl, async (client) => {
+/** Asked as the role that serves the platform: row security hides shops from their owner role. */
+async function hasShops(platformUrl: string): Promise<boolean> {
+  return withClient(platformUrl, async (client) => {
     const { rows } = await client.query<{ some: boolean }>(
       'SELECT EXISTS (SELECT FROM shops) AS some',
     );
@@ -67,7 +68,7 @@ export async function fillDemo(filling: Filling): Promise<void> {
       await recreate();
       await migrate(env, signal);
     });
-  } else if (await hasShops(urls.ownerUrl)) {
+  } else if (await hasShops(urls.platformUrl)) {
     return;
   }
   await progress.step('Filling the demo (once)', async () => {

@@ -60,6 +60,7 @@ export class Stack {
     await this.options.progress.step('Starting the web process and the worker', () =>
       Promise.all([this.web.start(), this.worker.start()]),
     );
+    this.stripe?.setWebhookMode('normal');
     this.writeRunFile();
   }
 
@@ -198,9 +199,11 @@ export class Stack {
       this.stripe = await startStripeFake({
         port: ports.stripe,
         dataFile: path.join(this.dataDir, 'stripe.jsonl'),
-        webhookUrl: `http://127.0.0.1:${ports.web}/api/webhooks/stripe`,
+        webhookUrl: `http://127.0.0.1:${ports.web}/api/stripe/webhook`,
         webhookSecret: localSecrets(this.dataDir).stripeWebhookSecret,
       });
+      // Nobody listens yet: what the demo pays is told once the web process is there.
+      this.stripe.setWebhookMode('hold');
     }
   }
 
