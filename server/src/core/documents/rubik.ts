@@ -2,8 +2,7 @@ import { readFileSync } from 'node:fs';
 import { unpackWoff } from './woff';
 
 export type Weight = 400 | 600;
-const subsets = ['latin', 'latin-ext', 'cyrillic', 'cyrillic-ext'] as const;
-export type Subset = (typeof subsets)[number];
+export type Subset = 'latin' | 'latin-ext' | 'cyrillic' | 'cyrillic-ext';
 
 const unpacked = new Map<string, Buffer>();
 
