@@ -8,7 +8,7 @@ import { Api } from '../api/api';
 import { isProblem } from '../api/problem';
 import { LocalKeepings } from './leaving';
 import { oneAtATime } from './one-at-a-time';
-import { type SessionAnswer, type Snapshot, snapshots } from './snapshot';
+import { type SessionAnswer, type ShopOfSession, type Snapshot, snapshots } from './snapshot';
 import { tabs } from './tabs';
 import { withoutSession } from './without-session';
 
@@ -114,6 +114,14 @@ export class Session {
   /** After the person's own name changed. */
   rename(name: string): void {
     this.#now.update((now) => now && { ...now, person: { ...now.person, name } });
+  }
+
+  /** After the shop's name, currency, zone or way of writing changed. */
+  restateShop(shop: Pick<ShopOfSession, 'name' | 'currency' | 'zone' | 'locale'>): void {
+    const { name, currency, zone, locale } = shop;
+    this.#now.update(
+      (now) => now && { ...now, shop: now.shop && { ...now.shop, name, currency, zone, locale } },
+    );
   }
 
   async #pickUp(): Promise<void> {

@@ -3,6 +3,7 @@ import { type AnswerOf } from '@lib/contracts/web';
 export type SessionAnswer = AnswerOf<'session.signIn'>;
 /** What the browser may keep of a session between visits: everything but the token. */
 export type Snapshot = Omit<SessionAnswer, 'accessToken' | 'expiresAt'>;
+export type ShopOfSession = NonNullable<SessionAnswer['shop']>;
 
 const place = 'tw.session';
 

@@ -14,6 +14,7 @@ import { ClientsApi } from './clients-api';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <tw-page-head heading="Clients">
+      <a matButton="outlined" routerLink="/shop/contacts">Contacts</a>
       @if (session.mayChange('imports.run')) {
         <a matButton="outlined" routerLink="/shop/imports">Import</a>
       }
