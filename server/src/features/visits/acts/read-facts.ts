@@ -25,70 +25,73 @@ export async function readFacts(
   acts: readonly Act[],
 ): Promise<VisitFacts> {
   const { shopId } = context;
-  const of: Bind = { shopId, visitId: visit.id, storeId: visit.storeId };
-  const ids = (sql: string, bind: Bind) =>
-    rows<{ id: string }>(sql, bind).then((found) => new Set(found.map((each) => each.id)));
+  const of: Bind = { shopId, visitId: visit.id, storeId: visit.storeId, clientId: visit.clientId };
   const named = (pick: (act: Act) => string | null | undefined) =>
     acts.map(pick).filter((id): id is string => typeof id === 'string');
 
   const jobIds = named((act) => (act.kind === 'job_opened' ? act.payload.jobId : null));
   const partUseIds = named((act) => (act.kind === 'part_used' ? act.payload.partUseId : null));
   const itemIds = named((act) => ('openItemId' in act.payload ? act.payload.openItemId : null));
-  const made = { ...of, jobIds, partUseIds, itemIds };
   return {
     cancelled: visit.state === 'cancelled',
     latest: context.now.getTime() + dayMs,
     ticket: visit.ticketNumber === null ? null : ticketName(visit.ticketNumber),
     machines: await machinesOf(of),
-    callIds: await ids(
+    callIds: await thoseOf(
       `select id from calls where shop_id = $shopId and store_id = $storeId
-         and state in ('open', 'planned') and id = any ($callIds::uuid[])`,
-      {
-        shopId,
-        storeId: visit.storeId,
-        callIds: named((act) => (act.kind === 'job_opened' ? act.payload.callId : null)),
-      },
+         and state in ('open', 'planned') and id = any ($ids::uuid[])`,
+      of,
+      named((act) => (act.kind === 'job_opened' ? act.payload.callId : null)),
     ),
-    partIds: await ids(
-      'select id from parts where shop_id = $shopId and id = any ($partIds::uuid[])',
-      {
-        shopId,
-        partIds: named((act) => (act.kind === 'part_used' ? act.payload.partId : null)),
-      },
+    partIds: await thoseOf(
+      'select id from parts where shop_id = $shopId and id = any ($ids::uuid[])',
+      of,
+      named((act) => (act.kind === 'part_used' ? act.payload.partId : null)),
     ),
-    causeIds: await ids(
-      `select j.id from jobs j where j.shop_id = $shopId and j.client_id = $clientId
-         and j.visit_id <> $visitId and j.result is not null and j.id = any ($causeIds::uuid[])`,
-      {
-        shopId,
-        visitId: visit.id,
-        clientId: visit.clientId,
-        causeIds: named((a) => (a.kind === 'warranty_marked' ? a.payload.causedByJobId : null)),
-      },
+    causeIds: await thoseOf(
+      `select id from jobs where shop_id = $shopId and client_id = $clientId
+         and visit_id <> $visitId and result is not null and id = any ($ids::uuid[])`,
+      of,
+      named((act) => (act.kind === 'warranty_marked' ? act.payload.causedByJobId : null)),
     ),
-    takenIds: await ids(
+    takenIds: await thoseOf(
       `select id from jobs
-         where shop_id = $shopId and id = any ($jobIds::uuid[]) and visit_id <> $visitId
+         where shop_id = $shopId and id = any ($ids::uuid[]) and visit_id <> $visitId
        union select u.id from part_uses u join jobs j on j.shop_id = u.shop_id and j.id = u.job_id
-         where u.shop_id = $shopId and u.id = any ($partUseIds::uuid[]) and j.visit_id <> $visitId
+         where u.shop_id = $shopId and u.id = any ($ids::uuid[]) and j.visit_id <> $visitId
        union select id from open_items
-         where shop_id = $shopId and id = any ($itemIds::uuid[]) and visit_id <> $visitId`,
-      made,
+         where shop_id = $shopId and id = any ($ids::uuid[]) and visit_id <> $visitId`,
+      of,
+      [...jobIds, ...partUseIds, ...itemIds],
     ),
-    openItemIds: await ids(
+    openItemIds: await thoseOf(
       `select id from open_items
-       where shop_id = $shopId and store_id = $storeId and id = any ($itemIds::uuid[])`,
-      { shopId, storeId: visit.storeId, itemIds },
+       where shop_id = $shopId and store_id = $storeId and id = any ($ids::uuid[])`,
+      of,
+      itemIds,
     ),
     photoOwners: await photoOwners(
       shopId,
       named((act) => (act.kind === 'photo' ? act.payload.attachmentId : null)),
     ),
-    keptJobIds: await keptJobs(
+    // Jobs that were ruled on, or that another job names as its cause.
+    keptJobIds: await thoseOf(
+      `select j.id from jobs j where j.shop_id = $shopId and j.id = any ($ids::uuid[])
+         and (exists (select 1 from rulings r where r.shop_id = j.shop_id
+             and r.visit_id = j.visit_id and r.job_id = j.id)
+           or exists (select 1 from jobs o where o.shop_id = j.shop_id
+             and o.client_id = j.client_id and o.caused_by_job_id = j.id))`,
       of,
       named((act) => (act.kind === 'job_dropped' ? act.payload.jobId : null)),
     ),
   };
+}
+
+/** Which of these ids the query finds; most deliveries name none of most kinds, and ask nothing. */
+async function thoseOf(sql: string, of: Bind, ids: readonly string[]): Promise<Set<string>> {
+  if (ids.length === 0) return new Set();
+  const found = await rows<{ id: string }>(sql, { ...of, ids });
+  return new Set(found.map((each) => each.id));
 }
 
 async function machinesOf(of: Bind): Promise<Map<string, MachineFact>> {
@@ -108,20 +111,6 @@ async function photoOwners(shopId: string, photoIds: string[]): Promise<Map<stri
     { shopId, photoIds },
   );
   return new Map(photos.map((photo) => [photo.id, photo.ownerId]));
-}
-
-/** Jobs that were ruled on, or that another job names as its cause. */
-async function keptJobs(of: Bind, jobIds: string[]): Promise<Set<string>> {
-  if (jobIds.length === 0) return new Set();
-  const kept = await rows<{ id: string }>(
-    `select j.id from jobs j where j.shop_id = $shopId and j.id = any ($jobIds::uuid[])
-       and (exists (select 1 from rulings r where r.shop_id = j.shop_id and r.visit_id = j.visit_id
-           and r.job_id = j.id)
-         or exists (select 1 from jobs o where o.shop_id = j.shop_id and o.client_id = j.client_id
-           and o.caused_by_job_id = j.id))`,
-    { shopId: of.shopId, jobIds },
-  );
-  return new Set(kept.map((job) => job.id));
 }
 
 interface StoredRow {
