@@ -1,3 +1,4 @@
+import { spawnSync } from 'node:child_process';
 import { addDays, monthBounds } from '@lib/domain';
 import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
 import { systemContext } from '../../server/src/core/context';
@@ -257,6 +258,14 @@ describe('statements', () => {
     expect(journal.status).toBe(200);
     expect(journal.text).toMatch(/\(S-0001\) statement/);
     expect(journal.text).toContain('412.87 USD');
+    // Another program agrees, where it is installed.
+    const books = spawnSync('hledger', ['-f', '-', 'balance', '-N', 'receivable'], {
+      input: journal.text,
+      encoding: 'utf8',
+      env: { ...process.env, LANG: 'C.UTF-8' },
+    });
+    if (!books.error)
+      expect([books.status, books.stdout]).toEqual([0, expect.stringContaining('412.87 USD')]);
     const { body } = await asOffice().call('ledger.entries', { query: { account: 'receivable' } });
     expect(body.items).toEqual([
       expect.objectContaining({ documentKind: 'statement', amount: 41_287 }),
