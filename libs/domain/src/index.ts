@@ -22,6 +22,7 @@ export {
 } from './ledger/posting';
 export * from './ledger/settlement-postings';
 export * from './ledger/trial-balance';
+export * from './words/document-name';
 export * from './words/symptoms';
 export * from './words/trade';
 export {
@@ -65,6 +66,7 @@ export { RuleError, parseRule } from './recurrence/rule-parts';
 export * from './recurrence/shift-for-holidays';
 export * from './recurrence/validate-rule';
 export * from './cautions/cautions';
+export * from './csv/csv-row';
 export * from './csv/formula-cell';
 export * from './contrast/contrast';
 export * from './signin/password-verdict';

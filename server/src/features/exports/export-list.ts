@@ -1,9 +1,9 @@
 import { once } from 'node:events';
+import { csvRow, csvStart } from '@lib/domain';
 import { type Response } from 'express';
 import { type Context } from '../../core/context';
 import { rows, withTenant } from '../../core/database/tenancy';
 import { type InputOf, RawReply } from '../../core/http/route';
-import { csvRow, csvStart } from '../../core/lists/csv';
 import { shown } from '../../core/lists/shown';
 import { shopFacts, type ShopFacts } from '../../core/shop-facts';
 import { tradeDayNow } from '../settings/trade-day';

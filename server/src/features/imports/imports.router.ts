@@ -1,5 +1,5 @@
+import { csvRow, csvStart } from '@lib/domain';
 import { handle, RawReply } from '../../core/http/route';
-import { csvRow, csvStart } from '../../core/lists/csv';
 import { importedColumns, type ListKind } from './columns';
 import { applyImport, discardImport } from './decide-import';
 import { listImportRows, listImports, showImport } from './read-imports';

@@ -1,12 +1,4 @@
-/** What people call a document: its kind's letter and its number, `S-0142`. */
-function named(letter: string, number: number): string {
-  return `${letter}-${String(number).padStart(4, '0')}`;
-}
-
-export const statementName = (number: number): string => named('S', number);
-export const ticketName = (number: number): string => named('T', number);
-export const paymentName = (number: number): string => named('P', number);
-export const contractName = (number: number): string => named('M', number);
+export { contractName, paymentName, statementName, ticketName } from '@lib/domain';
 
 /** `May 2031`, in the shop's language. */
 export function monthName(month: string, locale: string): string {

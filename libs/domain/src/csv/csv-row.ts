@@ -1,4 +1,4 @@
-import { neutraliseFormula } from '@lib/domain';
+import { neutraliseFormula } from './formula-cell';
 
 /**
  * One row of a CSV file (RFC 4180): cells in quotation marks where they need them, and none that a
