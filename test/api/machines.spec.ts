@@ -36,6 +36,7 @@ describe('machines', () => {
     const first = await add({ energy: 'gas', amps: 12.5, cyclesADay: 7.5, vendPrice: 350 });
     expect(first.status).toBe(201);
     expect(first.body).toMatchObject({ bay: 'A-01', amps: 12.5, cyclesADay: 7.5, state: 'up' });
+    expect(first.body.takingsADay).toBe(2625);
     expect(first.body.stickerCode).toMatch(/^[2-9A-Y]{8}$/);
     expect((await add({ bayNumber: 7 })).body.bay).toBe('A-07');
     expect((await add()).body.bay).toBe('A-08');
@@ -234,7 +235,7 @@ describe('machines', () => {
       (await buildPerson(shop, 'attendant', { clientId, storeId })).token,
     );
     const seen = await attendant.call('machines.show', { params: { machineId } });
-    expect([seen.status, seen.body.note]).toEqual([200, null]);
+    expect([seen.status, seen.body.note, seen.body.takingsADay]).toEqual([200, null, null]);
     expect((await attendant.call('machines.show', { params: { machineId: there } })).status).toBe(
       404,
     );

@@ -55,6 +55,8 @@ export const machineSummary = z.object({
   serial: z.string(),
   state: machineState,
   stateSince: instant,
+  /** What it takes on a usual day, in minor units; null for attendants, who see no money. */
+  takingsADay: z.int().nullable(),
   version,
 });
 

@@ -66,6 +66,7 @@ export { RuleError, parseRule } from './recurrence/rule-parts';
 export * from './recurrence/shift-for-holidays';
 export * from './recurrence/validate-rule';
 export * from './cautions/cautions';
+export * from './downtime/takings';
 export * from './csv/csv-row';
 export * from './csv/formula-cell';
 export * from './contrast/contrast';

@@ -1,3 +1,4 @@
+import { takingsADay } from '@lib/domain';
 import { type Context } from '../../core/context';
 import { type AnswerOf } from '../../core/http/route';
 
@@ -6,7 +7,15 @@ type Machine = AnswerOf<'machines.show'>;
 
 export interface MachineRow extends Omit<
   Machine,
-  'store' | 'client' | 'bank' | 'stateSince' | 'conditions' | 'jobs' | 'amps' | 'cyclesADay'
+  | 'store'
+  | 'client'
+  | 'bank'
+  | 'stateSince'
+  | 'takingsADay'
+  | 'conditions'
+  | 'jobs'
+  | 'amps'
+  | 'cyclesADay'
 > {
   storeId: string;
   storeName: string;
@@ -23,23 +32,29 @@ export interface MachineRow extends Omit<
 export const machineSummaryFrom = `machines m
   join stores s on s.shop_id = m.shop_id and s.id = m.store_id`;
 export const machineSummaryColumns = `m.id, m.bay, m.kind, m.energy, m.make, m.model, m.serial,
-  m.state, m.state_since as "stateSince", m.version, s.id as "storeId", s.name as "storeName"`;
+  m.state, m.state_since as "stateSince", m.vend_price as "vendPrice",
+  m.cycles_a_day as "cyclesADay", m.version, s.id as "storeId", s.name as "storeName"`;
 
 export const machineFrom = `${machineSummaryFrom}
   join clients c on c.shop_id = m.shop_id and c.id = m.client_id
   join banks b on b.shop_id = m.shop_id and b.id = m.bank_id`;
 export const machineColumns = `${machineSummaryColumns}, m.bay_number as "bayNumber",
   m.built_on as "builtOn", m.installed_on as "installedOn", m.volts, m.amps,
-  m.vend_price as "vendPrice", m.cycles_a_day as "cyclesADay",
   m.supplier_warranty_until as "supplierWarrantyUntil", m.sticker_code as "stickerCode", m.note,
   c.id as "clientId", c.name as "clientName", b.id as "bankId", b.letter`;
 
 type SummaryRow = Pick<
   MachineRow,
-  'storeId' | 'storeName' | 'stateSince' | Exclude<keyof Summary, 'store' | 'stateSince'>
+  | 'storeId'
+  | 'storeName'
+  | 'stateSince'
+  | 'vendPrice'
+  | 'cyclesADay'
+  | Exclude<keyof Summary, 'store' | 'stateSince' | 'takingsADay'>
 >;
 
-export function presentMachineSummary(row: SummaryRow): Summary {
+export function presentMachineSummary(context: Context, row: SummaryRow): Summary {
+  const seesMoney = context.role !== 'attendant';
   return {
     id: row.id,
     store: { id: row.storeId, name: row.storeName },
@@ -51,6 +66,7 @@ export function presentMachineSummary(row: SummaryRow): Summary {
     serial: row.serial,
     state: row.state,
     stateSince: row.stateSince.toISOString(),
+    takingsADay: seesMoney ? takingsADay(row.vendPrice, Number(row.cyclesADay)) : null,
     version: row.version,
   };
 }
@@ -61,7 +77,7 @@ export function presentMachine(
   more: Pick<Machine, 'conditions' | 'jobs'>,
 ): Machine {
   return {
-    ...presentMachineSummary(row),
+    ...presentMachineSummary(context, row),
     client: { id: row.clientId, name: row.clientName },
     bank: { id: row.bankId, letter: row.letter },
     bayNumber: row.bayNumber,

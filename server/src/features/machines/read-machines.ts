@@ -46,7 +46,7 @@ export function listMachines(context: Context, query: Query): Promise<AnswerOf<'
         limit: query.limit,
         cursor: query.cursor,
       },
-      presentMachineSummary,
+      (machine) => presentMachineSummary(context, machine),
     );
   });
 }
