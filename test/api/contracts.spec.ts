@@ -1,7 +1,8 @@
 import { addDays, tradeDayOf } from '@lib/domain';
 import { systemContext } from '../../server/src/core/context';
-import { rows } from '../../server/src/core/database/tenancy';
+import { platformRows, rows } from '../../server/src/core/database/tenancy';
 import { sweepRounds } from '../../server/src/features/contracts/sweep-rounds';
+import { sweepShop } from '../../server/src/features/sweep/sweep';
 import { api } from '../support/api';
 import { startTestServer, type TestServer } from '../support/app';
 import {
@@ -13,6 +14,8 @@ import {
   type TestShop,
 } from '../support/factories';
 import { zone } from '../support/money';
+import { pauseShop } from '../support/plans';
+import { workQueue } from '../support/queue';
 
 const today = tradeDayOf(new Date(), zone);
 
@@ -159,6 +162,29 @@ describe('maintenance contracts', () => {
       ),
     );
     expect(stored?.state).toBe('done');
+  });
+
+  it('plans by the sweep, but nothing for a paused shop', async () => {
+    const contract = await agree({ rule: 'FREQ=WEEKLY' });
+    const sweepIn = async (days: number) => {
+      await sweepShop(systemContext(shop.id, new Date(Date.now() + days * 86_400_000)), server.log);
+      return workQueue(server, 'rounds-plan');
+    };
+    await inShop(shop, async () => {
+      await rows('update visits set round_id = null where shop_id = $shopId', { shopId: shop.id });
+      await rows('delete from rounds where shop_id = $shopId and contract_id = $id', {
+        shopId: shop.id,
+        id: contract.id,
+      });
+    });
+    await pauseShop(shop);
+    expect(await sweepIn(0)).toBe(1);
+    expect(await rounds()).toEqual([]);
+    await platformRows(`update subscriptions set state = 'active' where shop_id = $shopId`, {
+      shopId: shop.id,
+    });
+    expect(await sweepIn(1)).toBe(1);
+    expect(await rounds()).toHaveLength(6);
   });
 
   it('refuses a rule that is none, stores of another client, and a start after the end', async () => {

@@ -17,6 +17,11 @@ export interface Cell extends Style {
 const ink = '#1d2436';
 const leading = 1.35;
 
+/** Figures of one width in columns of amounts; elsewhere the library's cache of words is used. */
+function figures(style: Style): { features?: PDFKit.Mixins.OpenTypeFeatures[] } {
+  return style.align === 'right' ? { features: ['tnum'] } : {};
+}
+
 type Structure = PDFKit.PDFStructureElement;
 
 /**
@@ -179,7 +184,7 @@ export class Sheet {
     let width = 0;
     for (const run of runsOf(text)) {
       this.use(run, style);
-      width += this.doc.widthOfString(run.text, { features: ['tnum', 'kern'] });
+      width += this.doc.widthOfString(run.text, figures(style));
     }
     return width;
   }
@@ -229,8 +234,8 @@ export class Sheet {
       if (cell.align === 'right') x += cell.width - this.widthOf(line, cell);
       for (const run of runsOf(line)) {
         this.use(run, cell);
-        this.doc.text(run.text, x, y, { lineBreak: false, features: ['tnum', 'kern'] });
-        x += this.doc.widthOfString(run.text, { features: ['tnum', 'kern'] });
+        this.doc.text(run.text, x, y, { lineBreak: false, ...figures(cell) });
+        x += this.doc.widthOfString(run.text, figures(cell));
       }
     });
   }
