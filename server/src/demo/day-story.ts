@@ -87,3 +87,19 @@ function nothingFound(machine: DemoMachine, random: Random): JobStory {
     left: 'put_right',
   };
 }
+
+/** The part has come: what was left unfinished is put right. */
+export function finishWork(machine: DemoMachine, random: Random): JobStory {
+  const fault = random.pick(faultsOf(machine));
+  return {
+    machine,
+    fault,
+    words: fault.reported,
+    mark: 'none',
+    markWords: '',
+    causedByJobId: null,
+    cause: fault.cause,
+    minutes: fault.minutes,
+    left: 'put_right',
+  };
+}

@@ -1,22 +1,15 @@
 import { DateTime } from 'luxon';
 import { ask } from './ask';
-import { type JobStory, type PastJob, thinkUpJob } from './day-story';
+import { type PastJob } from './day-story';
 import { closeMonthsDue, payWhatIsDue } from './months';
+import { addPhotos } from './photos';
+import { type Planned, planNext, thinkUp } from './plan-day';
 import { addContracts, planRounds } from './rounds';
 import { playVisit } from './play-visit';
 import { type Person } from './people';
 import { type Random } from './random';
-import { type DemoShop, type DemoStore } from './set-up';
+import { type DemoShop } from './set-up';
 import { signOff } from './sign-off';
-
-interface Planned {
-  visitId: string;
-  store: DemoStore;
-  tech: Person;
-  stories: JobStory[];
-  calls: Map<string, string>;
-  hour: number;
-}
 
 /** Lives through the shop's days, from `first` to `today`: calls, visits, rounds, months, payments. */
 export async function liveThrough(
@@ -40,7 +33,7 @@ export async function liveThrough(
         await live(shop, visit, day, past, unsigned, random);
       }
     }
-    coming = await planNext(shop, day, past, random, day >= today);
+    coming = await planNext(shop, day, past, random, today.diff(day, 'days').days);
   }
   await leaveCallsOpen(shop, today, random);
 }
@@ -63,101 +56,10 @@ async function live(
     arrival,
     random,
   );
+  await addPhotos(visit.tech, done, arrival, random);
   past.set(visit.store.id, [...(past.get(visit.store.id) ?? []), ...done]);
   if (unsigned) return;
   await signOff(shop, visit.visitId, day.set({ hour: 17, minute: 30 }).toJSDate(), random);
-}
-
-/** The afternoon before: calls come in, and the office plans the next working day. */
-async function planNext(
-  shop: DemoShop,
-  day: DateTime,
-  past: Map<string, PastJob[]>,
-  random: Random,
-  stayPlanned: boolean,
-): Promise<Planned[]> {
-  const next = day.plus({ days: day.weekday === 5 ? 3 : 1 });
-  const planned: Planned[] = [];
-  for (const store of shop.stores) {
-    if (!random.chance(store.plan.visitsAMonth / 21)) continue;
-    const tech = shop.techs[(planned.length + day.day) % shop.techs.length] as Person;
-    const stories = thinkUp(store, past.get(store.id) ?? [], next, 1 + random.below(3), random);
-    const hour = 8 + 2 * random.below(4);
-    const calls = await takeCalls(
-      shop,
-      store,
-      stories,
-      day.set({ hour: 10 + random.below(6) }),
-      random,
-    );
-    const visit = await ask(
-      shop.office.at(day.set({ hour: 16, minute: 40 }).toJSDate()),
-      'visits.plan',
-      {
-        body: {
-          storeId: store.id,
-          plannedOn: next.toISODate() as string,
-          techMembershipId: tech.membershipId,
-          window: {
-            from: `${String(hour).padStart(2, '0')}:00`,
-            until: `${String(hour + 2).padStart(2, '0')}:00`,
-          },
-          callIds: [...calls.values()],
-          reason: calls.size ? '' : 'Look over the machines',
-        },
-      },
-    );
-    if (stayPlanned && random.chance(0.5)) {
-      await ask(shop.office.at(day.set({ hour: 16, minute: 50 }).toJSDate()), 'visits.confirm', {
-        params: { visitId: visit.id },
-        version: visit.version,
-      });
-    }
-    planned.push({ visitId: visit.id, store, tech, stories, calls, hour });
-  }
-  return planned;
-}
-
-function thinkUp(
-  store: DemoStore,
-  past: readonly PastJob[],
-  day: DateTime,
-  howMany: number,
-  random: Random,
-): JobStory[] {
-  const taken = new Set<string>();
-  return Array.from({ length: howMany }, () => {
-    const story = thinkUpJob(store, past, day.toJSDate(), taken, random);
-    taken.add(story.machine.id);
-    return story;
-  });
-}
-
-/** Most machines were reported; the tech finds the rest on the spot. */
-async function takeCalls(
-  shop: DemoShop,
-  store: DemoStore,
-  stories: readonly JobStory[],
-  at: DateTime,
-  random: Random,
-): Promise<Map<string, string>> {
-  const calls = new Map<string, string>();
-  for (const story of stories) {
-    if (calls.size > 0 && random.chance(0.4)) continue;
-    const byStore = random.chance(0.5);
-    const caller = byStore ? store.attendant : shop.office;
-    const call = await ask(caller.at(at.toJSDate()), 'calls.report', {
-      body: {
-        storeId: store.id,
-        machineId: story.machine.id,
-        symptom: story.fault?.symptom ?? 'other',
-        words: story.words,
-        ...(byStore ? {} : { reportedBy: store.plan.attendant }),
-      },
-    });
-    calls.set(story.machine.id, call.id);
-  }
-  return calls;
 }
 
 /** Rounds of contracts planned for this day, which the first tech makes. */

@@ -1,9 +1,10 @@
 import { writeFileSync } from 'node:fs';
 import { DateTime } from 'luxon';
-import { readConfig } from '../core/config';
+import { config, readConfig } from '../core/config';
 import { platformRow } from '../core/database/tenancy';
 import { createLog } from '../core/logging';
 import { openServices } from '../core/process';
+import { ask } from './ask';
 import { growTo } from './clone-shop';
 import { liveThrough } from './history';
 import { addPlatformAdmin, demoPassword, type DemoAccount } from './people';
@@ -46,6 +47,8 @@ async function fill(): Promise<void> {
     const today = DateTime.now().setZone(plan.zone).startOf('day');
     const first = today.startOf('month').minus({ months: wholeMonths });
     const shop = await setUpShop(plan, first.minus({ days: 2 }).toJSDate(), random);
+    // Where no card payments are to be had, the shop connects later, as any shop would.
+    if (config().card.apiBase) await ask(shop.owner.at(new Date()), 'payments.connect');
     await liveThrough(shop, first, today, random);
     await setClocksBack(shop.id);
     accounts.push(...accountsOf(shop));
