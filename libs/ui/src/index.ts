@@ -5,6 +5,7 @@ export { CountStepper } from './choices/count-stepper';
 export { FieldError, errorText } from './choices/field-error';
 export { EmptyNote } from './notes/empty-note';
 export { type FloorBank, type FloorBay, type FloorChoice } from './floor/floor-bay';
+export { floorOf } from './floor/floor-of';
 export { FloorPlan } from './floor/floor-plan';
 export { FormNotes } from './notes/form-notes';
 export { ListShell } from './list/list-shell';

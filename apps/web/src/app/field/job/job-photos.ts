@@ -3,10 +3,10 @@ import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { from, map } from 'rxjs';
 import { PhotoView } from '../../core/photos/photo-view';
+import { shrinkPhoto } from '../../core/photos/shrink-photo';
 import { type SheetJob } from '../kept/kept';
 import { Outbox } from '../outbox/outbox';
 import { FieldVisit } from '../sheets/field-visit';
-import { shrinkPhoto } from './shrink-photo';
 
 /** Photos of the job: proof for the owner who was not there. */
 @Component({

@@ -6,6 +6,7 @@ import {
   type Choice,
   counted,
   EmptyNote,
+  floorOf,
   FloorPlan,
   LoadNote,
   PageHead,
@@ -24,7 +25,6 @@ import { ConditionsSection } from '../conditions/conditions-section';
 import { ContactsSection } from '../contacts/contacts-section';
 import { MachinesSection } from '../machines/machines-section';
 import { BanksSection } from './banks-section';
-import { floorOf } from './floor-of';
 import { OpenItems } from './open-items';
 import { StoreFacts } from './store-facts';
 import { StorePhotos } from './store-photos';

@@ -1,5 +1,4 @@
-import { floorOf } from './floor-of';
-import { type StoreFloor } from './stores-api';
+import { floorOf, type StoreFloor } from './floor-of';
 
 type Machine = StoreFloor['banks'][number]['machines'][number];
 

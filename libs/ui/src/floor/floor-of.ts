@@ -1,6 +1,9 @@
-import { counted, dayIn, dayText, type FloorBank } from '@lib/ui';
-import { type StoreFloor } from './stores-api';
+import { type AnswerOf } from '@lib/contracts/web';
+import { dayIn, dayText } from '../format/times';
+import { counted } from '../words/words';
+import { type FloorBank } from './floor-bay';
 
+export type StoreFloor = AnswerOf<'stores.floor'>;
 type Machine = StoreFloor['banks'][number]['machines'][number];
 
 export interface ReadAs {
