@@ -3,6 +3,7 @@ import { type Server, Agent, request as httpRequest } from 'node:http';
 import { type AddressInfo } from 'node:net';
 import { type Operation, operations, storesAnswer } from '@lib/contracts';
 import { z } from 'zod';
+import { type StripeFake, startStripeFake } from '../../infra/fakes/stripe/stripe-fake';
 import { startTestServer, type TestServer } from '../support/app';
 import { buildLaundry, buildPerson, buildShop } from '../support/factories';
 import { seeded, type Random } from '../support/random';
@@ -18,6 +19,7 @@ const atOnce = 8;
 const streams = new Set(['live.follow']);
 
 let server: TestServer;
+let stripe: StripeFake;
 let listening: Server;
 let port: number;
 let knownIds: string[];
@@ -25,7 +27,8 @@ let tokens: Record<string, string>;
 const agent = new Agent({ keepAlive: true, maxSockets: atOnce });
 
 beforeAll(async () => {
-  server = await startTestServer();
+  stripe = await startStripeFake();
+  server = await startTestServer({ STRIPE_API_BASE: stripe.url });
   listening = server.app.listen(0, '127.0.0.1');
   await once(listening, 'listening');
   port = (listening.address() as AddressInfo).port;
@@ -42,6 +45,7 @@ afterAll(async () => {
   listening.closeAllConnections();
   listening.close();
   await server.close();
+  await stripe.close();
 });
 
 interface Sent {

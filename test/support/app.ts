@@ -34,6 +34,8 @@ export async function startTestServer(
     DATABASE_POOL: '8',
     SESSION_SECRET: sessionSecret,
     STRIPE_SECRET_KEY: 'sk_test_local',
+    // Nobody: a test that pays brings the fake, and none may reach the real service.
+    STRIPE_API_BASE: 'http://127.0.0.1:9',
     STRIPE_WEBHOOK_SECRET: 'whsec_test_local',
     FILES_DIR: folder,
     LOG_LEVEL: process.env.LOG_LEVEL ?? 'silent',
