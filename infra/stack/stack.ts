@@ -10,7 +10,7 @@ import { portFrom } from '../process/ports';
 import { Service } from '../process/service';
 import { readState, writeState } from '../process/state-file';
 import { recreatePrivateDatabase, startPrivateDatabase, useGivenDatabase } from './database';
-import { fillDemo, migrate } from './fill';
+import { fillDemo, migrate, seed } from './fill';
 import { readAccounts, runFilePath, type RunFile } from './run-file';
 import { localSecrets } from './secrets';
 
@@ -19,6 +19,8 @@ export interface StackOptions {
   progress: Progress;
   /** Fill an empty database with the demo. */
   demo: boolean;
+  /** Then grow it by copies of its first shop, until there are so many. */
+  shops?: number;
   /** False for tests: the database need not survive a loss of power. */
   durable: boolean;
   /** The first port to try for the web application; the others follow it. */
@@ -87,7 +89,16 @@ export class Stack {
         recreate: this.cluster && (() => this.recreateDatabase()),
       });
     }
+    await this.growDemo(env);
     return env;
+  }
+
+  private async growDemo(env: Record<string, string>): Promise<void> {
+    const { shops, progress } = this.options;
+    if (!shops) return;
+    await progress.step(`Growing the demo to ${shops} shops`, () =>
+      seed(this.dataDir, env, ['--shops', String(shops)], this.aborter.signal),
+    );
   }
 
   private goOnOrLeave(): void {

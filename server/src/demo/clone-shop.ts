@@ -93,7 +93,8 @@ async function copyRows(table: string, shopId: string, found: object[]): Promise
       ...Object.fromEntries((later[table] ?? []).map((column) => [column, null])),
     }));
     await write(
-      `insert into ${table} (${columns})
+      // Numbers that count themselves are copied too: they order a visit's acts.
+      `insert into ${table} (${columns}) overriding system value
        select ${columns} from jsonb_populate_recordset(null::${table}, $copies::jsonb)`,
       { copies: JSON.stringify(copies) },
     );
