@@ -95,6 +95,21 @@ describe('statements', () => {
     });
   }
 
+  it('is begun once by two who press the button at the same moment, or one who presses twice', async () => {
+    const close = (key?: string) =>
+      asOffice().call('statements.close', { body: { month: last }, ...(key ? { key } : {}) });
+    const [one, other] = await Promise.all([close(), close()]);
+    expect([one.status, other.status].sort()).toEqual([201, 409]);
+    shop = await buildShop();
+    office = await buildPerson(shop, 'office');
+    const key = 'the-same-key-for-both-presses';
+    const [first, again] = await Promise.all([close(key), close(key)]);
+    expect([first.status, again.status]).toEqual([201, 201]);
+    expect(again.body.id).toBe(first.body.id);
+    const { body } = await asOffice().call('statements.runs');
+    expect(body.items).toHaveLength(1);
+  });
+
   it('opens with what the last one closed with, less what was paid meanwhile', async () => {
     await buildSignedOff(shop, store, { on: `${before}-10`, net: 12_000 });
     await closeBefore();
