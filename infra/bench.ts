@@ -1,8 +1,9 @@
 import { existsSync, readdirSync, writeFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
 import os from 'node:os';
 import path from 'node:path';
 import { Advice, progress } from './bootstrap/progress.cjs';
-import { type Bench } from './bench/bench-contract';
+import { type BenchFile } from './bench/bench-contract';
 import { root } from './paths';
 import { withPrivateStack } from './stack/private-stack';
 
@@ -34,9 +35,11 @@ export async function main(args: readonly string[]): Promise<void> {
     );
   }
   const file = path.join(folder, `${name}.bench.ts`);
-  const { bench } = (await import(file)) as { bench: Bench };
-  const result = await withPrivateStack({ progress, durable: true }, (stack) =>
-    bench({ stack, args: more, say: (text) => progress.say(text) }),
+  // tsx teaches `require` TypeScript; a native import() would not know the ending.
+  const { bench, needsWeb } = createRequire(__filename)(file) as BenchFile;
+  const result = await withPrivateStack(
+    { progress, durable: true, ...(needsWeb ? {} : { webDir: path.join(root, 'dist/web') }) },
+    (stack) => bench({ stack, args: more, say: (text) => progress.say(text) }),
   );
   console.table(result.rows);
   progress.say(result.met ? 'Targets met.' : 'Targets not met.');

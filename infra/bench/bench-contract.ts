@@ -16,5 +16,11 @@ export interface BenchResult {
   details?: unknown;
 }
 
-/** A file `test/bench/<name>.bench.ts` exports this as `bench`. */
 export type Bench = (context: BenchContext) => Promise<BenchResult>;
+
+/** What a file `test/bench/<name>.bench.ts` exports. */
+export interface BenchFile {
+  bench: Bench;
+  /** The web application is built first; else only the server is. */
+  needsWeb?: boolean;
+}
