@@ -1,4 +1,4 @@
-import { DateTime } from 'luxon';
+import { type DateTime } from 'luxon';
 import { ask } from './ask';
 import { type PastJob } from './day-story';
 import { closeMonthsDue, payWhatIsDue } from './months';
