@@ -214,7 +214,7 @@ async function environmentOf(stack: BenchContext['stack']): Promise<Record<strin
   };
 }
 
-/** Signed here, because the copied shops' people share the first one's sign-in. */
+/** Signed here, so that the people of 200 shops need not sign in one by one. */
 async function officeTokens(stack: BenchContext['stack']): Promise<string[]> {
   const secrets = localSecrets(stack.options.dataDir);
   openDatabase({ appUrl: stack.urls.appUrl, platformUrl: stack.urls.platformUrl, pool: 2 });
