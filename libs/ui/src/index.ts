@@ -8,6 +8,7 @@ export { type FloorBank, type FloorBay, type FloorChoice } from './floor/floor-b
 export { floorOf } from './floor/floor-of';
 export { FloorPlan } from './floor/floor-plan';
 export { FormNotes } from './notes/form-notes';
+export { ChoiceFilter } from './list/choice-filter';
 export { ListShell } from './list/list-shell';
 export {
   type ListAsk,

@@ -1,0 +1,45 @@
+import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
+import { MatFormField, MatLabel } from '@angular/material/form-field';
+import { MatInput } from '@angular/material/input';
+import { type Choice } from '../choices/choice-chips';
+
+/** Narrows a list to one of many; '' is any. */
+@Component({
+  selector: 'tw-choice-filter',
+  imports: [MatFormField, MatInput, MatLabel],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `
+    <mat-form-field subscriptSizing="dynamic">
+      <mat-label>{{ label() }}</mat-label>
+      <select matNativeControl (change)="choose($event)">
+        <option value="" [selected]="value() === ''">{{ any() }}</option>
+        @for (option of options(); track option.value) {
+          <option [value]="option.value" [selected]="option.value === value()">
+            {{ option.label }}
+          </option>
+        }
+      </select>
+    </mat-form-field>
+  `,
+  styles: `
+    :host {
+      flex: 0 1 11rem;
+      min-inline-size: 9rem;
+    }
+    mat-form-field {
+      inline-size: 100%;
+    }
+  `,
+})
+export class ChoiceFilter {
+  readonly label = input.required<string>();
+  /** What '' is called: "Every store". */
+  readonly any = input.required<string>();
+  readonly options = input.required<readonly Choice[]>();
+  readonly value = input.required<string>();
+  readonly chosen = output<string>();
+
+  protected choose(event: Event): void {
+    this.chosen.emit((event.target as HTMLSelectElement).value);
+  }
+}
