@@ -20,11 +20,11 @@ import { conditionWords } from '../visit/condition-words';
         }
         <span class="tw-soft">{{ visit().state | twWord }}</span>
       </div>
-      <h3>
+      <h2>
         <a class="tw-stretched" [routerLink]="['/field/visits', visit().id]">
           {{ visit().store.name }}
         </a>
-      </h3>
+      </h2>
       <p class="tw-soft">{{ visit().store.address }}</p>
       <p>{{ work() }}</p>
       @if (sheet().store.accessWords; as words) {
@@ -47,8 +47,9 @@ import { conditionWords } from '../visit/condition-words';
     [stub] span {
       display: block;
     }
-    h3 {
+    h2 {
       margin: 0;
+      font-size: 1rem;
     }
     p {
       margin: 0.25rem 0 0;

@@ -2,6 +2,7 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
+  effect,
   type ElementRef,
   inject,
   signal,
@@ -10,7 +11,7 @@ import {
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import { Callout, clockText, FloorPlan, PageHead, ProblemNote, Reading, WordPipe } from '@lib/ui';
-import { type SheetCall, type SheetMachine } from '../kept/kept';
+import { type Sheet, type SheetCall, type SheetMachine } from '../kept/kept';
 import { OutboxLine } from '../outbox/outbox-line';
 import { FieldVisit } from '../sheets/field-visit';
 import { CallNote } from './call-note';
@@ -43,6 +44,7 @@ export class VisitPage {
   readonly #router = inject(Router);
   readonly #reading = inject(Reading);
   protected readonly visit = inject(FieldVisit);
+  protected readonly panel = viewChild<ElementRef<HTMLElement>>('panel');
   protected readonly floorHead = viewChild<ElementRef<HTMLElement>>('floorHead');
 
   protected readonly conditions = computed(
@@ -89,6 +91,15 @@ export class VisitPage {
   protected readonly callOfMachine = computed(
     () => this.picking() ?? this.calls().find((call) => call.machine?.id === this.machine()?.id),
   );
+
+  constructor() {
+    // A floor is taller than a phone: what was touched must not be offered out of sight.
+    effect(() => this.panel()?.nativeElement.scrollIntoView({ block: 'nearest' }));
+  }
+
+  protected itemWords({ machine, words }: Sheet['openItems'][number]): string {
+    return machine && !words.startsWith(machine.bay) ? `${machine.bay}: ${words}` : words;
+  }
 
   protected machineOf(call: SheetCall): SheetMachine | undefined {
     return this.visit.sheet()?.machines.find(({ id }) => id === call.machine?.id);
