@@ -47,8 +47,12 @@ async function answer(pool: pg.Pool, statements: Statement[], made: string[]): P
   const client = await pool.connect();
   try {
     const results: unknown[] = [];
-    for (const { text, values } of statements) {
-      results.push((await client.query(text, values.map(own))).rows);
+    let counter: { recorded: number; now: number } | undefined;
+    for (const { text, values, counted } of statements) {
+      const ours = values.map((v) => (counter && v === counter.recorded ? counter.now : own(v)));
+      const { rows } = await client.query<{ value?: number }>(text, ours);
+      results.push(rows);
+      if (counted !== undefined) counter = { recorded: counted, now: Number(rows[0]?.value) };
     }
     return results;
   } catch (error) {

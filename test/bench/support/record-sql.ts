@@ -3,6 +3,8 @@ import pg from 'pg';
 export interface Statement {
   text: string;
   values: unknown[];
+  /** The number a counter gave, which later statements carry. */
+  counted?: number;
 }
 
 interface Queryable {
@@ -19,8 +21,12 @@ export async function recordSql(work: () => Promise<void>): Promise<Statement[]>
     const asObject =
       typeof first === 'object' && first !== null ? (first as Partial<Statement>) : undefined;
     const text = asObject?.text ?? (typeof first === 'string' ? first : undefined);
-    if (text)
-      statements.push({ text, values: asObject?.values ?? (Array.isArray(second) ? second : []) });
+    if (text) {
+      const values = asObject?.values ?? (Array.isArray(second) ? second : []);
+      const statement: Statement = { text, values };
+      statements.push(statement);
+      if (text.includes('insert into counters')) noteCount(statement, args);
+    }
     return original.apply(this, args);
   };
   try {
@@ -29,4 +35,14 @@ export async function recordSql(work: () => Promise<void>): Promise<Statement[]>
     prototype.query = original;
   }
   return statements;
+}
+
+/** Listens in on the answer, which Sequelize takes by callback. */
+function noteCount(statement: Statement, args: unknown[]): void {
+  const answer = args.at(-1);
+  if (typeof answer !== 'function') return;
+  args[args.length - 1] = (error: unknown, result: { rows: { value: number }[] } | undefined) => {
+    statement.counted = result?.rows[0]?.value;
+    (answer as (error: unknown, result: unknown) => void)(error, result);
+  };
 }
