@@ -17,7 +17,7 @@ import { fieldParts } from './field-parts';
       <span matTextPrefix>{{ sign() }}&nbsp;</span>
       <input matInput class="num" [twAmount]="currency() ?? ''" [formControl]="control()" />
       @if (unit(); as text) {
-        <span matTextSuffix>{{ text }}</span>
+        <span matTextSuffix>&nbsp;{{ text }}</span>
       }
       @if (hint(); as text) {
         <mat-hint>{{ text }}</mat-hint>

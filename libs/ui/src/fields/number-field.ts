@@ -12,7 +12,7 @@ import { fieldParts } from './field-parts';
       <mat-label>{{ label() }}</mat-label>
       <input matInput class="num" type="number" [step]="step()" [formControl]="control()" />
       @if (unit(); as text) {
-        <span matTextSuffix>{{ text }}</span>
+        <span matTextSuffix>&nbsp;{{ text }}</span>
       }
       @if (hint(); as text) {
         <mat-hint>{{ text }}</mat-hint>

@@ -31,7 +31,7 @@ export function bookHints(book: () => PriceBook | undefined): Signal<BookHints> 
       normalPerHour: `Price book: ${money(inForce.labour.normalPerHour)}`,
       afterHoursPerHour: `Price book: ${money(inForce.labour.afterHoursPerHour)}`,
       tripAmount: `Price book: ${span(trips, money)}`,
-      markupBasisPoints: `Price book: ${span(markups, (points) => `${percentText(points)} %`)}`,
+      markupBasisPoints: `Price book: ${span(markups, (points) => `${percentText(points)}\u00a0%`)}`,
     };
   });
 }

@@ -13,6 +13,7 @@ export interface BookLine {
 export interface BookTexts {
   money(amount: number): string;
   distance(metres: number): string;
+  day(day: string): string;
   part(partId: string): string;
 }
 
@@ -36,7 +37,7 @@ export function bookLines(book: PriceBook, texts: BookTexts): BookLine[] {
     Labour: labour(book, texts),
     Trips: trips(book, texts),
     Parts: parts(book, texts),
-    Taxes: taxes(book),
+    Taxes: taxes(book, texts),
     Warranty: warranty(book, texts),
   };
   return Object.entries(sections).flatMap(([section, lines]) =>
@@ -89,11 +90,11 @@ function parts({ markup, partPrices }: PriceBook, texts: BookTexts): Line[] {
   ];
 }
 
-function taxes({ taxes }: PriceBook): Line[] {
+function taxes({ taxes }: PriceBook, { day }: BookTexts): Line[] {
   const rates = taxes.rates.map(({ place, kind, basisPoints, validFrom }) =>
     line(
       `tax ${place} ${kind} ${validFrom}`,
-      `${labelFor(kind)}, ${place || 'everywhere'}, from ${validFrom}`,
+      `${labelFor(kind)}, ${place || 'everywhere'}, from ${day(validFrom)}`,
       `${percentText(basisPoints)} %`,
     ),
   );

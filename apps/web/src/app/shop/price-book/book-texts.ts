@@ -1,5 +1,5 @@
 import { computed, inject, type Signal } from '@angular/core';
-import { distanceText, distanceUnit, moneyText, Reading } from '@lib/ui';
+import { dayText, distanceText, distanceUnit, moneyText, Reading } from '@lib/ui';
 import { type BookTexts } from './book-lines';
 
 /** Amounts and distances as the shop writes them. Call it where injection is possible. */
@@ -11,6 +11,7 @@ export function bookTexts(parts: () => ReadonlyMap<string, string>): Signal<Book
     return {
       money: (amount) => moneyText(amount, reading.currency(), reading.locale()),
       distance: (metres) => `${distanceText(metres, unit)} ${unit.sign}`,
+      day: (day) => dayText(day, reading.locale()),
       part: (partId) => names.get(partId) ?? 'A part',
     };
   });

@@ -5,6 +5,7 @@ import { sampleBook } from './sample-book';
 const texts: BookTexts = {
   money: (amount) => `$${(amount / 100).toFixed(2)}`,
   distance: (metres) => `${metres} m`,
+  day: (day) => day,
   part: () => 'Door lock DL-2',
 };
 

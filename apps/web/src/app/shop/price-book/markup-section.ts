@@ -22,7 +22,7 @@ const roundings: readonly Choice<PriceBook['markup']['rounding']>[] = [
   styles: `
     .entry {
       display: grid;
-      grid-template-columns: repeat(auto-fit, minmax(min(100%, 9rem), 1fr));
+      grid-template-columns: repeat(auto-fit, minmax(min(100%, 10rem), 1fr));
       align-items: start;
       gap: 0.75rem;
       margin-block-end: 0.5rem;

@@ -49,7 +49,7 @@ const bearers: readonly Bearer[] = ['store', 'shop', 'supplier', 'contract', 'go
         <tw-number-field label="On labour" unit="days" [control]="warranty.labourDays" />
         <tw-number-field label="On parts" unit="days" [control]="warranty.partDays" />
         <tw-number-field
-          label="Same fault again is ours within"
+          label="Same fault is ours for"
           unit="days"
           [control]="warranty.callbackDays"
         />

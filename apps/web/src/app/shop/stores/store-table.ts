@@ -32,7 +32,15 @@ import { type StoreSummary } from './stores-api';
                 <a [routerLink]="['/shop/clients', store.client.id]">{{ store.client.name }}</a>
               </td>
             }
-            <td data-label="Address">{{ store.address }}</td>
+            <td data-label="Address">
+              {{
+                store.address.replaceAll(
+                  '
+',
+                  ', '
+                )
+              }}
+            </td>
             <td data-label="Machines"><tw-machine-tally [machines]="store.machines" /></td>
           </tr>
         }
