@@ -45,7 +45,7 @@ async function everything(): Promise<Tally[]> {
     await jest(['web', 'node', 'checks'], env),
     await jest(['api'], env),
     // The bounded set: `npm run faults` has more and longer ones.
-    await jest(['faults'], { ...env, FAULTS: 'bounded' }, [], 1),
+    await jest(['faults'], { ...env, FAULTS: 'bounded' }),
   ]);
   return [...first, second, ...tested, await browser([])];
 }
@@ -55,7 +55,7 @@ const parts: Record<string, (more: readonly string[]) => Promise<Tally[]>> = {
   unit: async (more) => [await jest(['web', 'node', 'checks'], {}, more)],
   api: (more) => withDatabase(async (env) => [await jest(['api'], env, more)]),
   faults: (more) =>
-    withDatabase(async (env) => [await jest(['faults'], { ...env, FAULTS: 'full' }, more, 1)]),
+    withDatabase(async (env) => [await jest(['faults'], { ...env, FAULTS: 'full' }, more)]),
   e2e: async (more) => [await browser(more)],
 };
 

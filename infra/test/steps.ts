@@ -74,7 +74,6 @@ export async function jest(
   projects: readonly string[],
   env: Env,
   more: readonly string[] = [],
-  workers = 2,
 ): Promise<Tally> {
   progress.say(`\nTests of ${projects.join(', ')}`);
   mkdirSync(results, { recursive: true });
@@ -84,7 +83,7 @@ export async function jest(
     '--selectProjects',
     ...projects,
     '--ci',
-    `--maxWorkers=${workers}`,
+    '--maxWorkers=2',
     '--passWithNoTests',
     '--json',
     `--outputFile=${file}`,

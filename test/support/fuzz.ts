@@ -4,11 +4,11 @@ import { type AddressInfo } from 'node:net';
 import { type Operation, operations, storesAnswer } from '@lib/contracts';
 import { z } from 'zod';
 import { type StripeFake, startStripeFake } from '../../infra/fakes/stripe/stripe-fake';
-import { startTestServer, type TestServer } from '../support/app';
-import { buildLaundry, buildPerson, buildShop } from '../support/factories';
-import { seeded, type Random } from '../support/random';
-import { type JsonSchema, sample } from '../support/sample-schema';
-import { brokenJson, spoil } from '../support/spoil';
+import { startTestServer, type TestServer } from './app';
+import { buildLaundry, buildPerson, buildShop } from './factories';
+import { seeded, type Random } from './random';
+import { type JsonSchema, sample } from './sample-schema';
+import { brokenJson, spoil } from './spoil';
 
 // Every operation of the API gets 1,000 requests that are nearly right. None may be answered with a
 // server error, and every refusal must be a problem document (RFC 9457).
@@ -25,28 +25,6 @@ let port: number;
 let knownIds: string[];
 let tokens: Record<string, string>;
 const agent = new Agent({ keepAlive: true, maxSockets: atOnce });
-
-beforeAll(async () => {
-  stripe = await startStripeFake();
-  server = await startTestServer({ STRIPE_API_BASE: stripe.url });
-  listening = server.app.listen(0, '127.0.0.1');
-  await once(listening, 'listening');
-  port = (listening.address() as AddressInfo).port;
-  const shop = await buildShop();
-  const laundry = await buildLaundry(shop);
-  const owner = await buildPerson(shop, 'shop_owner');
-  const client = await buildPerson(shop, 'client_owner', { clientId: laundry.clientId });
-  tokens = { shop: owner.token, client: client.token };
-  knownIds = [laundry.clientId, laundry.storeId, laundry.bankId, ...laundry.machineIds];
-});
-
-afterAll(async () => {
-  agent.destroy();
-  listening.closeAllConnections();
-  listening.close();
-  await server.close();
-  await stripe.close();
-});
 
 interface Sent {
   path: string;
@@ -135,10 +113,37 @@ function build(
   return { path: `${path}?${words.toString()}`.slice(0, 7000), body, headers };
 }
 
-describe('nearly right requests', () => {
-  const fuzzed = (Object.values(operations) as Operation[]).filter((o) => !streams.has(o.id));
+async function open(): Promise<void> {
+  stripe = await startStripeFake();
+  server = await startTestServer({ STRIPE_API_BASE: stripe.url });
+  listening = server.app.listen(0, '127.0.0.1');
+  await once(listening, 'listening');
+  port = (listening.address() as AddressInfo).port;
+  const shop = await buildShop();
+  const laundry = await buildLaundry(shop);
+  const owner = await buildPerson(shop, 'shop_owner');
+  const client = await buildPerson(shop, 'client_owner', { clientId: laundry.clientId });
+  tokens = { shop: owner.token, client: client.token };
+  knownIds = [laundry.clientId, laundry.storeId, laundry.bankId, ...laundry.machineIds];
+}
 
-  it.each(fuzzed.map((operation) => [operation.id, operation] as const))(
+async function close(): Promise<void> {
+  agent.destroy();
+  listening.closeAllConnections();
+  listening.close();
+  await server.close();
+  await stripe.close();
+}
+
+const fuzzed = (Object.values(operations) as Operation[]).filter((o) => !streams.has(o.id));
+
+/** The tests of every `parts`-th operation: a spec file each, so that all cores share the work. */
+export function fuzzOperations(part: number, parts: number): void {
+  const mine = fuzzed.filter((_, at) => at % parts === part);
+  beforeAll(open);
+  afterAll(close);
+
+  it.each(mine.map((operation) => [operation.id, operation] as const))(
     '%s is answered clearly, never with a server error',
     async (id, operation) => {
       const random = seeded(seed + [...id].reduce((sum, c) => sum + c.charCodeAt(0), 0));
@@ -173,4 +178,4 @@ describe('nearly right requests', () => {
     },
     300_000,
   );
-});
+}
