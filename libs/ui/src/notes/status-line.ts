@@ -24,6 +24,13 @@ import { MatButton } from '@angular/material/button';
     </div>
   `,
   styles: `
+    // In sight also for who has just pressed a button far down a long form.
+    :host {
+      position: sticky;
+      z-index: 3;
+      inset-block-start: 0.5rem;
+      display: block;
+    }
     .line {
       display: flex;
       flex-wrap: wrap;
