@@ -18,7 +18,7 @@ import { recordSql, type Statement } from './support/record-sql';
 import { signIn } from './support/signed-in';
 import { type Asked, tenOperations } from './support/ten-operations';
 
-// Limits (the targets): product throughput at least 0.5 of bare; p95 at 200 shops at most
+// The limits: product throughput at least 0.5 of bare; p95 at 200 shops at most
 // 1.3 of that at 10.
 const leastOfBare = 0.5;
 const mostOfTenShops = 1.3;

@@ -7,7 +7,7 @@ import { signAccessToken } from '../../server/src/core/auth/access-token';
 import { barePdf, bareSql } from './support/bare-close';
 import { buildBenchShop, type BenchShop } from './support/bench-shop';
 
-// Limits (the targets).
+// The limits.
 const mostOfBare = 3;
 const mostMegabytes = 512;
 
