@@ -4,8 +4,14 @@
 const { spawn } = require('node:child_process');
 const { Advice } = require('./progress.cjs');
 
-function tail(text, lines = 25) {
-  return text.trimEnd().split('\n').slice(-lines).join('\n');
+/** The end of the output; of a long one, rather where it begins to speak of an error. */
+function tail(text, most = 40) {
+  const lines = text.trimEnd().split('\n');
+  const first = lines.findIndex((line) => /\berror\b/i.test(line));
+  const from = Math.max(0, lines.length - most);
+  return first >= 0 && first < from
+    ? [...lines.slice(first, first + most), '...'].join('\n')
+    : lines.slice(from).join('\n');
 }
 
 function quietRun(command, args, { todo, ...options } = {}) {
