@@ -52,6 +52,15 @@ export class AreaFrame {
   protected readonly shown = computed(() =>
     this.items().filter(({ needs }) => !needs || this.session.may(needs)),
   );
+  /** The items under their headings, in the order in which each heading first comes. */
+  protected readonly groups = computed(() => {
+    const items = this.shown();
+    const names = [...new Set(items.map(({ group }) => group ?? ''))];
+    return names.map((name) => ({
+      name,
+      items: items.filter(({ group }) => (group ?? '') === name),
+    }));
+  });
   protected readonly belongsTo = computed(() => {
     const membership = this.session.membership();
     return membership?.clientName ?? this.session.shop()?.name ?? membership?.shopName ?? '';

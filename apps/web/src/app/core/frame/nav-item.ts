@@ -5,4 +5,6 @@ export interface NavItem {
   readonly link: string;
   /** Shown only to whose role holds it. */
   readonly needs?: Permission;
+  /** The heading it stands under, where an area has too many pages for one list. */
+  readonly group?: string;
 }

@@ -21,6 +21,8 @@ export interface RowsToSave<T> {
   readonly name: string;
   /** What the rows are, for the message: "statement". */
   readonly one: string;
+  /** Several of them, where that is not simply with an s: "entries". */
+  readonly many?: string;
   readonly columns: readonly Column<T>[];
   /** A page of the list as it is narrowed on screen. */
   page(asked: { limit: number; cursor?: string }): Observable<ListPage<T>>;
@@ -33,7 +35,7 @@ export class RowsExport {
   readonly #reading = inject(Reading);
   readonly busy = signal(false);
 
-  async save<T>({ name, one, columns, page }: RowsToSave<T>): Promise<void> {
+  async save<T>({ name, one, many, columns, page }: RowsToSave<T>): Promise<void> {
     if (this.busy()) return;
     this.busy.set(true);
     try {
@@ -44,7 +46,7 @@ export class RowsExport {
       ];
       const content = new Blob([csvStart, ...text], { type: 'text/csv;charset=utf-8' });
       saveFile({ name: `${name}.csv`, content });
-      this.#messages.say(`${name}.csv holds ${counted(rows.length, one)}.`);
+      this.#messages.say(`${name}.csv holds ${counted(rows.length, one, many)}.`);
     } catch (problem) {
       this.#messages.say(problemText(problem));
     } finally {
