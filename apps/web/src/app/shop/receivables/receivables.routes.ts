@@ -1,0 +1,9 @@
+import { type Routes } from '@angular/router';
+
+export const receivablesRoutes: Routes = [
+  {
+    path: '',
+    title: 'Receivables',
+    loadComponent: () => import('./ageing-list').then((m) => m.AgeingList),
+  },
+];
