@@ -6,6 +6,7 @@ import {
   inject,
   input,
   signal,
+  untracked,
 } from '@angular/core';
 import { problemText } from '@lib/ui/notes/problem-text';
 import { firstValueFrom } from 'rxjs';
@@ -72,7 +73,7 @@ export class PhotoView {
       const content = this.content();
       let gone = false;
       onCleanup(() => (gone = true));
-      void this.#load(fileId, content, () => gone);
+      void untracked(() => this.#load(fileId, content, () => gone));
     });
     inject(DestroyRef).onDestroy(() => this.#show(undefined));
   }
