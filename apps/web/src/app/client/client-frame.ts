@@ -14,8 +14,10 @@ export class ClientFrame {
   protected readonly items: readonly NavItem[] = [
     { label: 'Home', link: '/client/home' },
     { label: 'Machines', link: '/client/machines', needs: 'machines.read' },
+    { label: 'Calls', link: '/client/calls', needs: 'calls.read' },
     { label: 'Visits', link: '/client/visits', needs: 'visits.read' },
     { label: 'Statements', link: '/client/statements', needs: 'statements.read' },
-    { label: 'Account', link: '/account' },
+    { label: 'Payments', link: '/client/payments', needs: 'payments.read' },
+    { label: 'Contracts', link: '/client/contracts', needs: 'contracts.read' },
   ];
 }

@@ -1,4 +1,5 @@
 import { type Routes } from '@angular/router';
+import { may } from '../core/session/guards';
 import { ClientFrame } from './client-frame';
 
 export const clientRoutes: Routes = [
@@ -10,7 +11,35 @@ export const clientRoutes: Routes = [
       {
         path: 'home',
         title: 'Home',
-        loadComponent: () => import('./client-landing').then((m) => m.ClientLanding),
+        loadComponent: () => import('./home/home-page').then((m) => m.HomePage),
+      },
+      {
+        path: 'machines',
+        loadChildren: () => import('./machines/machines.routes').then((m) => m.machinesRoutes),
+      },
+      {
+        path: 'calls',
+        loadChildren: () => import('./calls/calls.routes').then((m) => m.callsRoutes),
+      },
+      {
+        path: 'visits',
+        loadChildren: () => import('./visits/visits.routes').then((m) => m.visitsRoutes),
+      },
+      {
+        path: 'statements',
+        canActivate: [may('statements.read')],
+        loadChildren: () =>
+          import('./statements/statements.routes').then((m) => m.statementsRoutes),
+      },
+      {
+        path: 'payments',
+        canActivate: [may('payments.read')],
+        loadChildren: () => import('./payments/payments.routes').then((m) => m.paymentsRoutes),
+      },
+      {
+        path: 'contracts',
+        canActivate: [may('contracts.read')],
+        loadChildren: () => import('./contracts/contracts.routes').then((m) => m.contractsRoutes),
       },
       {
         path: '**',
