@@ -2,15 +2,12 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
-  DestroyRef,
   effect,
   inject,
   input,
   linkedSignal,
   signal,
-  untracked,
 } from '@angular/core';
-import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router } from '@angular/router';
@@ -26,11 +23,9 @@ import {
   wordFor,
   WordsField,
 } from '@lib/ui';
-import { debounceTime } from 'rxjs';
 import { Confirm } from '../../core/confirm/confirm';
 import { Messages } from '../../core/messages/messages';
 import { Titles } from '../../core/navigation/titles';
-import { type SheetJob } from '../kept/kept';
 import { OutboxLine } from '../outbox/outbox-line';
 import { PartBook } from '../parts/part-book';
 import { FieldVisit } from '../sheets/field-visit';
@@ -38,24 +33,12 @@ import { conditionWords } from '../visit/condition-words';
 import { workMinutes } from '../visit/work-minutes';
 import { BecauseOf } from './because-of';
 import { JobCautions } from './job-cautions';
-import {
-  behindCovers,
-  causeChoices,
-  codeChoices,
-  commonCodes,
-  jobForm,
-  markChoices,
-  written,
-} from './job-form';
+import { JobEntry } from './job-entry';
+import { causeChoices, codeChoices, commonCodes, markChoices } from './job-form';
 import { JobParts } from './job-parts';
 import { JobPhotos } from './job-photos';
-import { entriesFor, jobValues, type JobValues } from './job-values';
 import { LeftAs } from './left-as';
 import { type LeftState, missingFrom, resultsFor } from './leaving';
-
-const names = Object.keys as (values: JobValues) => (keyof JobValues)[];
-/** Taps that belong together, as several on a stepper, are one act. */
-const settling = 700;
 
 /** One job, for one thumb: everything entered is kept at once, there is nothing to save. */
 @Component({
@@ -80,7 +63,8 @@ const settling = 700;
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './job-page.html',
   styleUrl: './job-page.scss',
-  host: { '(focusout)': 'commitAll()', '(document:visibilitychange)': 'commitAll()' },
+  providers: [JobEntry],
+  host: { '(focusout)': 'entry.commit()', '(document:visibilitychange)': 'entry.commit()' },
 })
 export class JobPage {
   readonly #router = inject(Router);
@@ -91,22 +75,11 @@ export class JobPage {
   protected readonly visit = inject(FieldVisit);
   readonly jobId = input.required<string>();
 
-  protected readonly job = computed<SheetJob | undefined>(() =>
-    this.visit.sheet()?.jobs.find(({ id }) => id === this.jobId()),
-  );
-  readonly #values = computed(() => {
-    const job = this.job();
-    return job && jobValues(job);
-  });
-  /** Made once for each job; afterwards it follows what others record. */
-  protected readonly form = linkedSignal({
-    source: () => (this.job() ? this.jobId() : undefined),
-    computation: (id) => (id ? jobForm(untracked(this.#values) as JobValues) : undefined),
-  });
-  protected readonly values = signal<JobValues | undefined>(undefined);
-
-  protected readonly closed = this.visit.closed;
-  protected readonly locked = computed(() => !this.job()?.shop?.cautionsAt);
+  protected readonly entry = inject(JobEntry);
+  protected readonly job = this.entry.job;
+  protected readonly form = this.entry.form;
+  protected readonly closed = this.entry.closed;
+  protected readonly locked = this.entry.locked;
   protected readonly heading = computed(() => {
     const machine = this.job()?.machine;
     return machine ? machine.bay : 'Job';
@@ -129,11 +102,10 @@ export class JobPage {
     const callId = this.job()?.callId;
     return this.visit.sheet()?.calls.find(({ id }) => id === callId);
   });
-  protected readonly cardValue = computed(() => this.visit.sheet()?.store.cardValue ?? 0);
 
   protected readonly allCodes = signal(false);
   protected readonly codes = computed(() => {
-    const chosen = codeChoices.findIndex(({ value }) => value === this.values()?.code);
+    const chosen = codeChoices.findIndex(({ value }) => value === this.entry.values()?.code);
     const all = this.allCodes() || chosen >= commonCodes;
     return all ? codeChoices : codeChoices.slice(0, commonCodes);
   });
@@ -153,15 +125,16 @@ export class JobPage {
       .reduce((sum, { extraMinutes }) => sum + extraMinutes, 0);
   });
 
-  protected readonly left = linkedSignal<LeftState | null>(
-    () => (this.job()?.machineState ?? null) as LeftState | null,
-  );
+  // Values of their own: every act makes the job a new object, and must not undo a choice.
+  readonly #leftBefore = computed(() => (this.job()?.machineState ?? null) as LeftState | null);
+  readonly #resultBefore = computed(() => this.job()?.result ?? null);
+  protected readonly left = linkedSignal<LeftState | null>(() => this.#leftBefore());
   protected readonly results = computed(() => {
     const left = this.left();
     return left ? resultsFor(left).map((value) => ({ value, label: wordFor(value) })) : [];
   });
   protected readonly result = linkedSignal<JobResult | null>(() => {
-    const recorded = this.job()?.result ?? null;
+    const recorded = this.#resultBefore();
     const left = this.left();
     if (!left) return recorded;
     const possible = resultsFor(left);
@@ -169,7 +142,7 @@ export class JobPage {
   });
   protected readonly missing = computed(() => {
     const job = this.job();
-    const now = this.values();
+    const now = this.entry.values();
     if (!job || !now) return [];
     const shop = job.shop && { ...job.shop, minutes: now.minutes };
     return missingFrom({ ...job, cause: now.cause, shop }, this.left(), this.result());
@@ -182,28 +155,8 @@ export class JobPage {
 
   constructor() {
     void this.#book.takeAlong();
-    effect((onCleanup) => {
-      const form = this.form();
-      if (!form) return;
-      this.values.set(form.getRawValue());
-      const changes = form.valueChanges.subscribe(() => this.values.set(form.getRawValue()));
-      const settled = form.valueChanges
-        .pipe(debounceTime(settling))
-        .subscribe(() => this.#commit((name) => !written.has(name)));
-      onCleanup(() => {
-        changes.unsubscribe();
-        settled.unsubscribe();
-      });
-      untracked(() => this.#followMoney());
-    });
-    effect(() => this.#follow());
-    effect(() => this.#lock());
+    effect(() => this.entry.open(this.jobId()));
     effect(() => this.#titles.name(this.heading()));
-    inject(DestroyRef).onDestroy(() => this.commitAll());
-  }
-
-  protected commitAll(): void {
-    this.#commit(() => true);
   }
 
   protected async tick(code: string): Promise<void> {
@@ -211,18 +164,16 @@ export class JobPage {
   }
 
   protected take(name: 'minutes' | 'accessMinutes', minutes: number): void {
-    const control = this.form()?.controls[name];
-    control?.setValue(minutes);
-    control?.markAsDirty();
-    this.commitAll();
+    this.entry.enter(name, minutes);
+    this.entry.commit();
   }
 
   /** Our own mistake as the cause and as the mark are one thing to a tech. */
   protected causeChosen(): void {
-    const form = this.form();
-    if (form?.controls.cause.value !== 'shop_error' || form.controls.mark.value !== 'none') return;
-    form.controls.mark.setValue('own_mistake');
-    form.controls.mark.markAsDirty();
+    const values = this.form()?.getRawValue();
+    if (values?.cause === 'shop_error' && values.mark === 'none') {
+      this.entry.enter('mark', 'own_mistake');
+    }
   }
 
   protected chooseResult(result: string): void {
@@ -230,7 +181,7 @@ export class JobPage {
   }
 
   protected async done(): Promise<void> {
-    this.commitAll();
+    this.entry.commit();
     this.tried.set(true);
     const [machineState, result, job] = [this.left(), this.result(), this.job()];
     if (this.missing().length > 0 || !machineState || !result || !job) return;
@@ -250,7 +201,7 @@ export class JobPage {
       destructive: true,
     });
     if (!agreed) return;
-    this.form()?.markAsPristine();
+    this.entry.forget();
     await this.visit.record('job_dropped', { jobId: this.jobId() });
     await this.#toVisit();
   }
@@ -258,65 +209,4 @@ export class JobPage {
   #toVisit(): Promise<boolean> {
     return this.#router.navigate(['/field/visits', this.visit.id]);
   }
-
-  #commit(which: (name: keyof JobValues) => boolean): void {
-    const form = this.form();
-    const job = this.job();
-    if (!form || !job || this.closed()) return;
-    const touched = names(form.getRawValue()).filter(
-      (name) => which(name) && form.controls[name].dirty && form.controls[name].valid,
-    );
-    if (touched.length === 0) return;
-    const entries = entriesFor(job, form.getRawValue(), new Set(touched));
-    for (const name of touched) form.controls[name].markAsPristine();
-    for (const { kind, payload } of entries) void this.visit.record(kind, payload);
-  }
-
-  /** What is not being entered here shows what was recorded, also on another phone. */
-  #follow(): void {
-    const form = this.form();
-    const values = this.#values();
-    if (!form || !values) return;
-    for (const name of names(values)) {
-      const control = form.controls[name] as { value: unknown; setValue(value: unknown): void };
-      const shown = typeof control.value === 'string' ? control.value.trim() : control.value;
-      if (form.controls[name].pristine && shown !== values[name]) control.setValue(values[name]);
-    }
-  }
-
-  #lock(): void {
-    const form = this.form();
-    if (!form) return;
-    const closed = this.closed();
-    const locked = this.locked();
-    for (const name of names(form.getRawValue())) {
-      const off = closed || (locked && (behindCovers as readonly string[]).includes(name));
-      const control = form.controls[name];
-      if (off && control.enabled) control.disable({ emitEvent: false });
-      if (!off && control.disabled) control.enable({ emitEvent: false });
-    }
-  }
-
-  /** Coins are counted at the price of the cycles, until the tech says otherwise. */
-  #followMoney(): void {
-    const form = this.form();
-    const machineId = this.job()?.machine.id;
-    const price = this.visit.sheet()?.machines.find(({ id }) => id === machineId)?.vendPrice ?? 0;
-    if (!form) return;
-    const { cycles, coins, amount } = form.controls;
-    const usual = () => (coins.value > 0 ? cycles.value * price : 0);
-    let before = usual();
-    form.valueChanges.pipe(takeUntilDestroyed(this.#destroyed)).subscribe(() => {
-      const now = usual();
-      const own = amount.value !== null && amount.value !== before;
-      if (now !== before && !own) {
-        amount.setValue(now, { emitEvent: false });
-        amount.markAsDirty();
-        this.values.set(form.getRawValue());
-      }
-      before = now;
-    });
-  }
-
-  readonly #destroyed = inject(DestroyRef);
 }

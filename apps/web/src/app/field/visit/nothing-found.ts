@@ -6,6 +6,7 @@ import {
   input,
   linkedSignal,
   output,
+  untracked,
 } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
@@ -55,9 +56,11 @@ export class NothingFound {
   /** The tech thought better of it. */
   readonly given = output<void>();
 
+  // Made anew for another machine, and only for that: the sheet changes with every act.
+  readonly #machineId = computed(() => this.machine().id);
   protected readonly form = linkedSignal({
-    source: () => this.machine().id,
-    computation: () => this.#begun(),
+    source: this.#machineId,
+    computation: () => untracked(() => this.#begun()),
   });
   /** One cycle at the price of the machine; what was put in is named, so that the box reconciles. */
   protected readonly moneyWords = computed(() => {
