@@ -57,13 +57,19 @@ module.exports = {
     {
       ...node,
       displayName: 'node',
+      setupFilesAfterEnv: ['<rootDir>/test/support/after-env.ts'],
       testMatch: [
         '<rootDir>/libs/{domain,contracts}/src/**/*.spec.ts',
         '<rootDir>/server/src/**/*.spec.ts',
         '<rootDir>/infra/**/*.spec.ts',
       ],
     },
-    { ...node, displayName: 'checks', testMatch: ['<rootDir>/test/checks/**/*.spec.ts'] },
+    {
+      ...node,
+      displayName: 'checks',
+      setupFilesAfterEnv: ['<rootDir>/test/support/after-env.ts'],
+      testMatch: ['<rootDir>/test/checks/**/*.spec.ts'],
+    },
     {
       ...node,
       displayName: 'api',
