@@ -1,6 +1,6 @@
 import { type Answer, html, json, readBody, send, serve } from '../http';
 import { page } from '../page';
-import { letterPage, listPage } from './pages';
+import { frameRights, letterPage, listPage } from './pages';
 import { Letters } from './letters';
 import { Behaviour, type Mode, modes, startSmtp } from './smtp';
 
@@ -53,8 +53,7 @@ async function part(letters: Letters, id: string, rest: string): Promise<Answer>
   // Links of a mail open beside it; nothing in it may run or reach further.
   const content = letter.html.replace(/<head>|^/i, (head) => `${head}<base target="_blank">`);
   return html(content, 200, {
-    'content-security-policy':
-      "default-src 'none'; style-src 'unsafe-inline'; img-src data:; sandbox allow-popups",
+    'content-security-policy': `default-src 'none'; style-src 'unsafe-inline'; img-src data:; sandbox ${frameRights}`,
   });
 }
 

@@ -2,6 +2,12 @@ import { escapeHtml } from '../http';
 import { page } from '../page';
 import { type Letter, type OpenedLetter } from './letters';
 
+/**
+ * A mail's HTML gets an origin of its own, and its content policy lets no script of the mail run.
+ * Scripts are not forbidden here as well, since tools that look at pages could then not look at it.
+ */
+export const frameRights = 'allow-scripts allow-popups allow-popups-to-escape-sandbox';
+
 const note = 'Local mailbox. Nothing that arrives here leaves this machine.';
 
 function time(instant: string): string {
@@ -45,7 +51,7 @@ export function letterPage(letter: OpenedLetter): string {
     .join('\n');
   const asHtml = letter.html
     ? `<h2>As HTML</h2>
-<iframe sandbox="allow-popups" title="The mail as HTML" src="/mails/${letter.id}/html"></iframe>`
+<iframe sandbox="${frameRights}" title="The mail as HTML" src="/mails/${letter.id}/html"></iframe>`
     : '';
   return page(
     letter.subject || '(no subject)',
