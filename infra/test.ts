@@ -5,6 +5,7 @@ import { runFilePath } from './stack/run-file';
 import { withPrivateStack } from './stack/private-stack';
 import { jest, lint, playwright, rooms, types } from './test/steps';
 import { exitCode, lastLine, single, sum, type Tally } from './test/tally';
+import { shopsNeeded } from '../test/e2e/support/works';
 import { startTestCluster } from '../test/support/test-cluster';
 
 type Env = Record<string, string>;
@@ -22,7 +23,7 @@ async function withDatabase(work: (env: Env) => Promise<Tally[]>): Promise<Tally
 
 async function browser(more: readonly string[]): Promise<Tally> {
   try {
-    return await withPrivateStack({ progress }, (stack) =>
+    return await withPrivateStack({ progress, shops: shopsNeeded }, (stack) =>
       playwright(
         {
           E2E_RUN_FILE: runFilePath(stack.options.dataDir),

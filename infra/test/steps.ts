@@ -121,7 +121,8 @@ export async function playwright(env: Env, more: readonly string[] = []): Promis
   mkdirSync(results, { recursive: true });
   const file = path.join(results, 'playwright.json');
   rmSync(file, { force: true });
-  const ended = await shown('@playwright/test/cli.js', ['test', '--reporter=list,json', ...more], {
+  const args = ['test', '--config', 'test/e2e/playwright.config.ts', '--reporter=list,json'];
+  const ended = await shown('@playwright/test/cli.js', [...args, ...more], {
     ...env,
     PLAYWRIGHT_JSON_OUTPUT_NAME: file,
   });
