@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { counted, ListShell, listState, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ListExport } from '../exports/list-export';
@@ -73,10 +74,11 @@ export class ClientList {
 
   protected readonly clients = listState((ask) => this.#api.list(ask), {
     sorts: { name: 'Name', number: 'Number' },
-    filters: { show: '' as Shown },
+    filters: filtersFromAddress({ show: '' as Shown }),
   });
 
   constructor() {
-    reloadOn(this.clients, 'clients', 'stores', 'machines');
+    keepInAddress(this.clients);
+    reloadOn(this.clients, 'clients', 'stores', 'machines', 'machine');
   }
 }

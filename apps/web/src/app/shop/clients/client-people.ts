@@ -44,7 +44,7 @@ export class ClientPeople {
   protected readonly mayChange = computed(() => this.#session.mayChange('invitations.manage'));
 
   constructor() {
-    reloadOn(this.everybody, 'invitations', 'client-people');
+    reloadOn(this.everybody, 'crew', 'invitations');
   }
 
   protected storeOf(storeId: string | null): string {

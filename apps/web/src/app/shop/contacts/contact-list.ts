@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { ListShell, listState, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ListExport } from '../exports/list-export';
@@ -80,10 +81,11 @@ export class ContactList {
 
   protected readonly contacts = listState((ask) => this.#api.list(ask), {
     sorts: { name: 'Name' },
-    filters: { show: '' as Shown },
+    filters: filtersFromAddress({ show: '' as Shown }),
   });
 
   constructor() {
+    keepInAddress(this.contacts);
     reloadOn(this.contacts, 'contacts');
   }
 }

@@ -15,13 +15,26 @@ import {
   PageHead,
   Reading,
   SectionHead,
+  wordFor,
 } from '@lib/ui';
 import { firstValueFrom } from 'rxjs';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
 import { reloadOn } from '../../core/live/reload-on';
 import { Messages } from '../../core/messages/messages';
 import { Session } from '../../core/session/session';
 import { ShowFilter, type Shown } from '../show-filter/show-filter';
-import { CrewApi, type CrewRole, type Invitation } from './crew-api';
+import { CrewApi, type CrewMember, type CrewRole, type Invitation } from './crew-api';
+
+const columns: readonly Column<CrewMember>[] = [
+  { head: 'Name', text: ({ name }) => name },
+  { head: 'Role', text: ({ role }) => wordFor(role) },
+  { head: 'E-mail address', text: ({ email }) => email },
+  { head: 'Initials', text: ({ initials }) => initials },
+  { head: 'Van', text: ({ van }) => van },
+  { head: 'An hour costs', amount: ({ costPerHour }) => costPerHour },
+  { head: 'Ended', text: ({ endedAt }) => endedAt?.slice(0, 10) },
+];
 
 /** The shop's people, and who was invited to be one of them. */
 @Component({
@@ -51,13 +64,14 @@ import { CrewApi, type CrewRole, type Invitation } from './crew-api';
 })
 export class CrewList {
   readonly #api = inject(CrewApi);
+  readonly #exports = inject(RowsExport);
   readonly #messages = inject(Messages);
   readonly #reading = inject(Reading);
   readonly #session = inject(Session);
 
   protected readonly crew = listState((ask) => this.#api.list(ask), {
     sorts: { name: 'Name' },
-    filters: { role: '' as '' | CrewRole, show: '' as Shown },
+    filters: filtersFromAddress({ role: '' as '' | CrewRole, show: '' as Shown }),
   });
   protected readonly sign = computed(() =>
     currencySign(this.#reading.currency(), this.#reading.locale()),
@@ -70,12 +84,24 @@ export class CrewList {
   });
 
   constructor() {
+    keepInAddress(this.crew);
     reloadOn(this.crew, 'crew');
-    reloadOn(this.invitations, 'invitations');
+    reloadOn(this.invitations, 'crew', 'invitations');
   }
 
   protected chooseRole(event: Event): void {
     this.crew.filterBy('role', (event.target as HTMLSelectElement).value as '' | CrewRole);
+  }
+
+  protected save(): void {
+    const { cursor: _cursor, ...ask } = this.crew.ask();
+    void this.#exports.save({
+      name: 'crew',
+      one: 'person',
+      many: 'people',
+      columns,
+      page: (asked) => this.#api.list({ ...ask, ...asked }),
+    });
   }
 
   protected async inviteAgain(invitation: Invitation): Promise<void> {

@@ -10,7 +10,24 @@ import {
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { type Choice, ChoiceChips, LabelPipe, ListShell, listState } from '@lib/ui';
-import { type Import, ImportsApi, type RowOutcome } from './imports-api';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
+import { type Import, type ImportRow, ImportsApi, type RowOutcome } from './imports-api';
+
+const columns: readonly Column<ImportRow>[] = [
+  { head: 'Row', text: ({ row }) => row },
+  { head: 'What', text: ({ label }) => label },
+  { head: 'Is', text: ({ outcome }) => outcome },
+  {
+    head: 'Column by column',
+    text: ({ errors, changes }) =>
+      [
+        ...errors.map(({ column, detail }) => `${column} ${detail}`),
+        ...changes.map(
+          ({ column, from, to }) => `${column}: ${from || 'empty'} to ${to || 'empty'}`,
+        ),
+      ].join('; '),
+  },
+];
 
 type OutcomeFilter = '' | RowOutcome;
 
@@ -40,6 +57,7 @@ type OutcomeFilter = '' | RowOutcome;
 })
 export class ImportRows {
   readonly #api = inject(ImportsApi);
+  readonly #exports = inject(RowsExport);
   readonly sent = input.required<Import>();
 
   protected readonly rows = listState((ask) => this.#api.rows(this.#importId(), ask), {
@@ -71,6 +89,17 @@ export class ImportRows {
       untracked(() => {
         if (!this.outcome.value) this.outcome.setValue(first as OutcomeFilter);
       });
+    });
+  }
+
+  /** The rows as they are narrowed, to be put right beside the file. */
+  protected save(): void {
+    const { cursor: _cursor, ...ask } = this.rows.ask();
+    void this.#exports.save({
+      name: `rows of ${this.sent().fileName.replace(/\.\w+$/, '')}`,
+      one: 'row',
+      columns,
+      page: (asked) => this.#api.rows(this.#importId(), { ...ask, ...asked }),
     });
   }
 }

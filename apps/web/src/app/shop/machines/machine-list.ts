@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { ListShell, listState, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ListExport } from '../exports/list-export';
@@ -39,10 +40,11 @@ export class MachineList {
 
   protected readonly machines = listState((ask) => this.#api.list(ask), {
     sorts: { bay: 'Bay', serial: 'Serial number', '-stateSince': 'Changed last' },
-    filters: { state: '' as StateFilter, kind: '' as KindFilter },
+    filters: filtersFromAddress({ state: '' as StateFilter, kind: '' as KindFilter }),
   });
 
   constructor() {
-    reloadOn(this.machines, 'machines', 'stores');
+    keepInAddress(this.machines);
+    reloadOn(this.machines, 'machines', 'machine', 'stores');
   }
 }

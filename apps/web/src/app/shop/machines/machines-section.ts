@@ -35,6 +35,6 @@ export class MachinesSection {
   );
 
   constructor() {
-    reloadOn(this.machines, 'machines');
+    reloadOn(this.machines, 'machines', 'machine');
   }
 }

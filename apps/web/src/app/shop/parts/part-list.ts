@@ -5,6 +5,7 @@ import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { RouterLink } from '@angular/router';
 import { currencySign, ListShell, listState, MoneyText, PageHead, Reading } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ListExport } from '../exports/list-export';
@@ -45,7 +46,7 @@ export class PartList {
 
   protected readonly parts = listState((ask) => this.#api.list(ask), {
     sorts: { number: 'Number', name: 'Name' },
-    filters: { show: '' as Shown, category: '' as string },
+    filters: filtersFromAddress({ show: '' as Shown, category: '' as string }),
   });
   readonly #inUse = rxResource({ stream: () => this.#api.categories() });
   readonly #inForce = rxResource({ stream: () => this.#book.inForce() });
@@ -57,6 +58,7 @@ export class PartList {
   );
 
   constructor() {
+    keepInAddress(this.parts);
     reloadOn(this.parts, 'parts');
     reloadOn(this.#inUse, 'parts');
   }

@@ -98,9 +98,9 @@ function taxes({ taxes }: PriceBook, { day }: BookTexts): Line[] {
       `${percentText(basisPoints)} %`,
     ),
   );
-  const none = rates.length ? [] : [line('no-tax', 'Rates', 'none: nothing is taxed')];
   const rounding = taxes.rounding === 'line' ? 'line by line' : 'on the ticket’s total';
-  return [...rates, ...none, line('tax-rounding', 'Rounded', rounding)];
+  const count = rates.length ? counted(rates.length, 'rate') : 'none: nothing is taxed';
+  return [line('rates', 'Rates', count), ...rates, line('tax-rounding', 'Rounded', rounding)];
 }
 
 function warranty({ warranty }: PriceBook, { money }: BookTexts): Line[] {

@@ -32,7 +32,7 @@ import { type ComparedSection } from './compare-books';
                   @if (line.before === null) {
                     new
                   } @else if (line.before !== undefined) {
-                    {{ line.before }} before
+                    before: {{ line.before }}
                   }
                 </td>
               }

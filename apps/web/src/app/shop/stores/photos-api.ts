@@ -1,8 +1,5 @@
 import { inject, Injectable } from '@angular/core';
-import { type AnswerOf } from '@lib/contracts/web';
 import { Api } from '../../core/api/api';
-
-export type Photo = AnswerOf<'files.list'>['items'][number];
 
 @Injectable({ providedIn: 'root' })
 export class PhotosApi {
@@ -23,9 +20,5 @@ export class PhotosApi {
       body: { ownerKind: 'store', ownerId: storeId },
       upload,
     });
-  }
-
-  content(photoId: string, size: 'full' | 'small') {
-    return this.#api.file('files.show', { params: { fileId: photoId }, query: { size } });
   }
 }

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { ListShell, listState, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ListExport } from '../exports/list-export';
@@ -44,10 +45,11 @@ export class StoreList {
 
   protected readonly stores = listState((ask) => this.#api.list(ask), {
     sorts: { name: 'Name', number: 'Number' },
-    filters: { show: '' as Shown },
+    filters: filtersFromAddress({ show: '' as Shown }),
   });
 
   constructor() {
-    reloadOn(this.stores, 'stores', 'clients', 'machines');
+    keepInAddress(this.stores);
+    reloadOn(this.stores, 'stores', 'clients', 'machines', 'machine');
   }
 }

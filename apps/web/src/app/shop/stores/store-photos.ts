@@ -4,16 +4,15 @@ import { MatButton } from '@angular/material/button';
 import { InstantPipe, LoadNote, problemText, SectionHead } from '@lib/ui';
 import { firstValueFrom } from 'rxjs';
 import { v7 } from 'uuid';
-import { openFile } from '../../core/api/save-file';
 import { reloadOn } from '../../core/live/reload-on';
+import { PhotoView } from '../../core/photos/photo-view';
 import { Session } from '../../core/session/session';
-import { type Photo, PhotosApi } from './photos-api';
-import { PhotoImage } from './photo-image';
+import { PhotosApi } from './photos-api';
 
 /** Photos of a store: the way in, the back of the machines, where the valves are. */
 @Component({
   selector: 'tw-store-photos',
-  imports: [InstantPipe, LoadNote, MatButton, PhotoImage, SectionHead],
+  imports: [InstantPipe, LoadNote, MatButton, PhotoView, SectionHead],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <tw-section-head heading="Photos">
@@ -43,9 +42,7 @@ import { PhotoImage } from './photo-image';
       <ul>
         @for (photo of photos.value().items; track photo.id) {
           <li>
-            <button type="button" [attr.aria-label]="'Open ' + photo.name" (click)="open(photo)">
-              <tw-photo-image [photo]="photo" />
-            </button>
+            <tw-photo [fileId]="photo.id" [name]="photo.name" />
             <span class="tw-soft">{{ photo.addedAt | twInstant }}</span>
           </li>
         } @empty {
@@ -67,16 +64,6 @@ import { PhotoImage } from './photo-image';
     }
     .none {
       grid-column: 1 / -1;
-    }
-    li button {
-      display: block;
-      inline-size: 100%;
-      padding: 0;
-      border: 1px solid var(--tw-hairline);
-      border-radius: var(--tw-corner);
-      background: none;
-      cursor: pointer;
-      overflow: hidden;
     }
     span {
       font-size: 0.875rem;
@@ -119,9 +106,5 @@ export class StorePhotos {
       picker.value = '';
       this.busy.set(false);
     }
-  }
-
-  protected async open(photo: Photo): Promise<void> {
-    openFile(await firstValueFrom(this.#api.content(photo.id, 'full')));
   }
 }

@@ -85,7 +85,7 @@ const unplaced: Judge = ({ day }) => {
     id: 'unplaced',
     count,
     words: count === 1 ? 'visit of today has no tech' : 'visits of today have no tech',
-    link: '/shop/visits',
+    link: '/shop/day-sheet',
     label: 'Assign',
     pressing: true,
   };
@@ -98,7 +98,7 @@ const close: Judge = ({ close, runs }, { locale, currency }) => {
       id: 'run',
       count: 0,
       words: `The close of ${monthText(run.month, locale)} is ${run.state === 'held' ? 'held' : 'stuck'}`,
-      link: '/shop/statements',
+      link: '/shop/month-close',
       label: 'Look',
       pressing: true,
     };
@@ -110,7 +110,7 @@ const close: Judge = ({ close, runs }, { locale, currency }) => {
     count: 0,
     words: `${monthText(close.month, locale)} can be closed`,
     detail: `${counted(close.totals.stores, 'statement')}, ${total} in all.${unfinishedWords(close)}`,
-    link: '/shop/statements/close',
+    link: '/shop/month-close',
     label: 'Close the month',
     pressing: false,
   };
@@ -134,7 +134,8 @@ const mails: Judge = ({ failedMails, uncertainMails }) => {
     count: lost + unsure,
     words: lost + unsure === 1 ? 'mail needs a decision' : 'mails need a decision',
     detail: `${parts.filter(Boolean).join(', ')}.`,
-    link: '/shop/statements/mails',
+    link: '/shop/mails',
+    query: { state: unsure ? 'uncertain' : 'failed' },
     label: 'Settle',
     pressing: true,
   };
@@ -149,7 +150,8 @@ const overdue: Judge = ({ overdue }, { locale, currency }) =>
       count,
       words: count === 1 ? 'store is overdue' : 'stores are overdue',
       detail: `${moneyText(sum, currency, locale)} past its due date.`,
-      link: '/shop/payments',
+      link: '/shop/receivables',
+      query: { overdue: 'true' },
       label: 'See who owes',
       pressing: true,
     };

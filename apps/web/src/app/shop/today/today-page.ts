@@ -66,7 +66,7 @@ export class TodayPage {
   });
   protected readonly notUpWords = computed(() => {
     const count = this.facts.hasValue() ? (this.facts.value().notUp?.count.value ?? 0) : 0;
-    return count ? `${counted(count, 'machine')} not up, over all stores.` : 'Every machine is up.';
+    return count ? `${counted(count, 'machine')} not up, over all stores.` : undefined;
   });
 
   constructor() {
