@@ -16,6 +16,7 @@ export class PlatformFrame {
     { label: 'Plans', link: '/platform/plans', needs: 'platform.read' },
     { label: 'Queues', link: '/platform/queues', needs: 'platform.read' },
     { label: 'Mail', link: '/platform/mail', needs: 'platform.read' },
+    { label: 'Card events', link: '/platform/card-events', needs: 'platform.read' },
     { label: 'Audit', link: '/platform/audit', needs: 'platform.read' },
   ];
 }
