@@ -15,14 +15,16 @@ import { FloorsApi, type StoreSummary } from './floors-api';
   imports: [FloorPlan, LoadNote],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    @if (level() === 2) {
-      <h2>{{ store().name }}</h2>
-    } @else {
-      <h3>{{ store().name }}</h3>
+    @if (headed()) {
+      @if (level() === 2) {
+        <h2>{{ store().name }}</h2>
+      } @else {
+        <h3>{{ store().name }}</h3>
+      }
+      <p>
+        <strong class="tw-figures">{{ tally().earning }} of {{ tally().all }}</strong> earning
+      </p>
     }
-    <p>
-      <strong class="tw-figures">{{ tally().earning }} of {{ tally().all }}</strong> earning
-    </p>
     @if (floor.hasValue()) {
       <tw-floor
         [label]="'Floor of ' + store().name"
@@ -65,6 +67,8 @@ export class StoreFloor {
   readonly store = input.required<StoreSummary>();
   /** Of its heading, below that of the page or of a section. */
   readonly level = input<2 | 3>(3);
+  /** False where the page says the name of the store already. */
+  readonly headed = input(true);
 
   protected readonly floor = rxResource({
     params: () => this.store().id,

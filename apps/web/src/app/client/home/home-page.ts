@@ -1,3 +1,4 @@
+import { NgTemplateOutlet } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
@@ -16,7 +17,7 @@ import { nextSteps, standingStill } from './next-steps';
 import { Owed } from './owed';
 import { StillList } from './still-list';
 
-const stepsAtFirst = 4;
+const stepsAtFirst = 3;
 
 /** Is my store earning, what happens next, what do I owe; then the proof. */
 @Component({
@@ -27,6 +28,7 @@ const stepsAtFirst = 4;
     LoadNote,
     MatButton,
     NextStep,
+    NgTemplateOutlet,
     Owed,
     PageHead,
     RouterLink,
@@ -44,18 +46,26 @@ export class HomePage {
   protected readonly facts = rxResource({ stream: () => this.#api.facts() });
   protected readonly all = signal(false);
 
+  protected readonly stores = computed(() =>
+    this.facts.hasValue() ? this.facts.value().stores : [],
+  );
   protected readonly name = computed(() => {
-    const stores = this.facts.hasValue() ? this.facts.value().stores : [];
-    const only = stores.length === 1 ? stores[0] : undefined;
+    const only = this.stores().length === 1 ? this.stores()[0] : undefined;
     return only?.name ?? this.session.membership()?.clientName ?? 'Home';
   });
   protected readonly sub = computed(() => {
     const shop = this.session.shop()?.name;
     return shop ? `Kept running by ${shop}` : undefined;
   });
-  protected readonly tally = computed(() =>
-    earningOf(this.facts.hasValue() ? this.facts.value().stores : []),
+  /** Null for who sees no money. */
+  protected readonly balances = computed(() =>
+    this.facts.hasValue() ? this.facts.value().balances : null,
   );
+  /** What should have been paid is said first. */
+  protected readonly overdue = computed(() =>
+    (this.balances() ?? []).some(({ overdue }) => overdue > 0),
+  );
+  protected readonly tally = computed(() => earningOf(this.stores()));
   protected readonly steps = computed(() =>
     this.facts.hasValue() ? nextSteps(this.facts.value()) : [],
   );

@@ -15,7 +15,7 @@ import { type Balance } from './home-api';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @for (store of owing(); track store.storeId) {
-      <tw-ticket copy="rose" [alarmed]="store.overdue > 0">
+      <tw-ticket copy="rose" wide [alarmed]="store.overdue > 0">
         <div stub>
           <tw-money [amount]="store.balance" [currency]="store.currency" />
           @if (store.overdue > 0) {
