@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  computed,
   effect,
   forwardRef,
   inject,
@@ -9,6 +10,7 @@ import {
   untracked,
 } from '@angular/core';
 import { type ControlValueAccessor, NG_VALUE_ACCESSOR } from '@angular/forms';
+import { MatButton } from '@angular/material/button';
 import { DayPipe } from '@lib/ui';
 import { firstValueFrom } from 'rxjs';
 import { Api } from '../../core/api/api';
@@ -16,10 +18,13 @@ import { type SheetJob } from '../kept/kept';
 import { FieldVisit } from '../sheets/field-visit';
 import { type CauseCandidate, likelyCauses } from './likely-causes';
 
+/** More than these are rarely looked at, and a phone is short. */
+const likeliest = 4;
+
 /** Which earlier job brought this one about, the likeliest first; what follows from it follows it. */
 @Component({
   selector: 'tw-because-of',
-  imports: [DayPipe],
+  imports: [DayPipe, MatButton],
   changeDetection: ChangeDetectionStrategy.OnPush,
   providers: [
     { provide: NG_VALUE_ACCESSOR, useExisting: forwardRef(() => BecauseOf), multi: true },
@@ -36,7 +41,7 @@ import { type CauseCandidate, likelyCauses } from './likely-causes';
         />
         <span>No earlier job of ours</span>
       </label>
-      @for (candidate of candidates(); track candidate.jobId) {
+      @for (candidate of shown(); track candidate.jobId) {
         <label [class.chosen]="chosen() === candidate.jobId">
           <input
             type="radio"
@@ -58,6 +63,11 @@ import { type CauseCandidate, likelyCauses } from './likely-causes';
         </label>
       } @empty {
         <p class="tw-soft">No job of ours at this store is recent enough to matter.</p>
+      }
+      @if (shown().length < candidates().length) {
+        <button matButton type="button" (click)="all.set(true)">
+          All {{ candidates().length }} earlier jobs
+        </button>
       }
     </fieldset>
   `,
@@ -110,6 +120,13 @@ export class BecauseOf implements ControlValueAccessor {
   readonly job = input.required<SheetJob>();
 
   protected readonly candidates = signal<readonly CauseCandidate[]>([]);
+  protected readonly all = signal(false);
+  /** The likeliest, and the one that was chosen. */
+  protected readonly shown = computed(() =>
+    this.candidates().filter(
+      ({ jobId }, at) => this.all() || at < likeliest || jobId === this.chosen(),
+    ),
+  );
   protected readonly chosen = signal<string | null>(null);
   protected readonly disabled = signal(false);
   #changed: (value: string | null) => void = () => undefined;

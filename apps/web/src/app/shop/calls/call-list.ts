@@ -2,12 +2,20 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { type CallState } from '@lib/contracts/web';
-import { DayPipe, InstantPipe, labelFor, LabelPipe, ListShell, listState, PageHead } from '@lib/ui';
+import {
+  ChoiceFilter,
+  DayPipe,
+  InstantPipe,
+  labelFor,
+  LabelPipe,
+  ListShell,
+  listState,
+  PageHead,
+} from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
-import { type Column, RowsExport } from '../exports/rows-export';
-import { filtersFromAddress, keepInAddress } from '../filters/address-filters';
-import { ChoiceFilter } from '../filters/choice-filter';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
 import { StoreChoices } from '../stores/store-choices';
 import { type CallItem, CallsApi } from './calls-api';
 
@@ -28,6 +36,12 @@ type StateFilter = '' | 'live' | CallState;
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './call-list.html',
+  styles: `
+    .more {
+      display: block;
+      font-size: 0.875rem;
+    }
+  `,
 })
 export class CallList {
   readonly #api = inject(CallsApi);

@@ -14,10 +14,12 @@ import { type VisitItem } from '../visits/visits-api';
       <a class="tw-stretched" [routerLink]="['/shop/visits', visit().id]">{{
         visit().store.name
       }}</a>
-      <span class="when tw-figures">{{ when() }}, {{ stateWords(visit()) }}</span>
-      <span class="work">{{ work() }}</span>
+      <span class="tw-figures">{{ when() }}</span>
+      <span>{{ work() }}</span>
       @if (trouble(); as words) {
         <span class="trouble">{{ words }}</span>
+      } @else {
+        <span>{{ stateWords(visit()) }}</span>
       }
     </div>
   `,

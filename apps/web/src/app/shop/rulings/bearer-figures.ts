@@ -48,6 +48,20 @@ import { type RulingGroup } from './ruling-groups';
       </tbody>
     </table>
   `,
+  styles: `
+    :host {
+      display: block;
+    }
+    thead th {
+      white-space: normal;
+    }
+    @media (max-width: 30rem) {
+      th,
+      td {
+        padding-inline: 0.25rem;
+      }
+    }
+  `,
 })
 export class BearerFigures {
   readonly #reading = inject(Reading);

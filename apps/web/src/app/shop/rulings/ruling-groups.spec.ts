@@ -58,6 +58,23 @@ describe('rulings put together for a decision', () => {
     ]);
   });
 
+  it('joins them whatever the rule says of labour, parts and trip in particular', () => {
+    const covers = (what: string): [string, string, boolean][] => [
+      ['contract_covers', `The contract covers ${what}.`, true],
+    ];
+    const lines = [
+      line('a', 100, 40, 'contract', covers('labour')),
+      line('b', 200, 90, 'contract', covers('parts'), { waiting: false }),
+    ];
+    const [group, ...others] = rulingGroups([{ ...lock, lines }]);
+    expect(others).toEqual([]);
+    expect(group?.reasons.map(({ words }) => words)).toEqual([
+      'The contract covers labour.',
+      'The contract covers parts.',
+    ]);
+    expect(group?.waiting).toBe(true);
+  });
+
   it('numbers each reason once, in the order it was weighed', () => {
     expect(first.reasons.map(({ words }) => words)).toEqual([
       'Imre marked it.',

@@ -66,10 +66,10 @@ function groupOf(job: RulingJob, lines: readonly RulingLine[]): RulingGroup {
   };
 }
 
-/** What a line's proposal rests on, in its own words; amounts of single lines are beside it. */
+/** The rule a line's proposal rests on; how it is worded for labour and parts does not matter. */
 function basisOf({ proposed }: RulingLine): string {
   const deciding = proposed.reasons.find(({ decides }) => decides);
-  return `${proposed.bearer} ${deciding?.code ?? ''} ${deciding?.words ?? ''}`;
+  return `${proposed.bearer} ${deciding?.code ?? ''}`;
 }
 
 function reasonsOf(lines: readonly RulingLine[]): Reason[] {

@@ -1,11 +1,10 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { counted, DayPipe, ListShell, listState, MoneyText, PageHead } from '@lib/ui';
+import { ChoiceFilter, counted, DayPipe, ListShell, listState, MoneyText, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
-import { type Column, RowsExport } from '../exports/rows-export';
-import { filtersFromAddress, keepInAddress } from '../filters/address-filters';
-import { ChoiceFilter } from '../filters/choice-filter';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
 import { ClientChoices } from '../clients/client-choices';
 import { moneySign } from '../money/money-sign';
 import { RulingsApi, type WaitingVisit } from './rulings-api';

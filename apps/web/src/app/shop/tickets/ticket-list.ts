@@ -1,12 +1,11 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { DayPipe, ListShell, listState, MoneyText, PageHead } from '@lib/ui';
+import { ChoiceFilter, DayPipe, ListShell, listState, MoneyText, PageHead } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
 import { ClientChoices } from '../clients/client-choices';
-import { type Column, RowsExport } from '../exports/rows-export';
-import { filtersFromAddress, keepInAddress } from '../filters/address-filters';
-import { ChoiceFilter } from '../filters/choice-filter';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
 import { moneySign } from '../money/money-sign';
 import { StoreChoices } from '../stores/store-choices';
 import { type TicketItem, TicketsApi } from './tickets-api';
@@ -19,6 +18,12 @@ type Absorbed = '' | 'shop' | 'supplier' | 'contract' | 'goodwill';
   imports: [ChoiceFilter, DayPipe, ListShell, MoneyText, PageHead, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './ticket-list.html',
+  styles: `
+    .more {
+      display: block;
+      font-size: 0.875rem;
+    }
+  `,
 })
 export class TicketList {
   readonly #api = inject(TicketsApi);

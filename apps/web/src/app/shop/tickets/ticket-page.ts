@@ -4,6 +4,7 @@ import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { DayPipe, InstantPipe, LoadNote, MoneyText, PageHead, TicketCard } from '@lib/ui';
 import { Titles } from '../../core/navigation/titles';
+import { Session } from '../../core/session/session';
 import { ticketWords } from './line-words';
 import { TicketLines } from './ticket-lines';
 import { TicketsApi } from './tickets-api';
@@ -29,6 +30,7 @@ import { TicketsApi } from './tickets-api';
 export class TicketPage {
   readonly #api = inject(TicketsApi);
   readonly #titles = inject(Titles);
+  protected readonly session = inject(Session);
   readonly ticketId = input.required<string>();
 
   protected readonly ticket = rxResource({

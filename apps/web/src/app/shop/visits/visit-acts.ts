@@ -34,10 +34,12 @@ const cameLate = 10 * 60_000;
             @for (line of lines(); track line.act.id) {
               <tr>
                 <td data-label="When">
-                  {{ line.act.at | twInstant }}
-                  @if (line.late) {
-                    <span class="tw-soft">came {{ line.act.receivedAt | twInstant }}</span>
-                  }
+                  <div>
+                    {{ line.act.at | twInstant }}
+                    @if (line.late) {
+                      <span class="tw-soft">came {{ line.act.receivedAt | twInstant }}</span>
+                    }
+                  </div>
                 </td>
                 <td data-label="Machine">{{ line.bay }}</td>
                 <td data-label="What">{{ line.words }}</td>

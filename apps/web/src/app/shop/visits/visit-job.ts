@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import {
+  counted,
   labelFor,
   minutesText,
   MoneyText,
@@ -22,6 +23,7 @@ import { type VisitJob as Job } from './visits-api';
 })
 export class VisitJob {
   readonly job = input.required<Job>();
+  protected readonly counted = counted;
 
   protected readonly title = computed(() => {
     const { symptom, findingCode } = this.job();

@@ -2,12 +2,11 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { type VisitState } from '@lib/contracts/web';
-import { DayPipe, labelFor, ListShell, listState, PageHead, Reading } from '@lib/ui';
+import { ChoiceFilter, DayPipe, labelFor, ListShell, listState, PageHead, Reading } from '@lib/ui';
+import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
-import { type Column, RowsExport } from '../exports/rows-export';
-import { filtersFromAddress, keepInAddress } from '../filters/address-filters';
-import { ChoiceFilter } from '../filters/choice-filter';
+import { type Column, RowsExport } from '../../core/lists/rows-export';
 import { StoreChoices } from '../stores/store-choices';
 import { crewChoices } from './crew-choices';
 import { stateWords, windowWords, workWords } from './visit-words';
@@ -21,6 +20,12 @@ type StateFilter = '' | 'live' | 'unticketed' | VisitState;
   imports: [ChoiceFilter, DayPipe, ListShell, MatButton, PageHead, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './visit-list.html',
+  styles: `
+    .more {
+      display: block;
+      font-size: 0.875rem;
+    }
+  `,
 })
 export class VisitList {
   readonly #api = inject(VisitsApi);
