@@ -23,8 +23,8 @@ import { type Choice } from '../choices/choice-chips';
   `,
   styles: `
     :host {
-      flex: 0 1 11rem;
-      min-inline-size: 9rem;
+      flex: 1 1 9rem;
+      max-inline-size: 13rem;
     }
     mat-form-field {
       inline-size: 100%;
