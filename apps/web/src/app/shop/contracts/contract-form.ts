@@ -9,10 +9,12 @@ import {
   type Choice,
   ChoiceChips,
   ChoiceFilter,
+  dayIn,
   FieldError,
   FormNotes,
   LoadNote,
   PageHead,
+  Reading,
   SelectField,
   TextField,
 } from '@lib/ui';
@@ -23,6 +25,7 @@ import { type HasChanges, warnBeforeUnload } from '../../core/forms/unsaved-chan
 import { Messages } from '../../core/messages/messages';
 import { ClientChoices } from '../clients/client-choices';
 import { CrewApi } from '../crew/crew-api';
+import { monthsLater } from '../month-close/months';
 import { StoreChoices } from '../stores/store-choices';
 import { contractForm, kinds, shifts, termsOf } from './contract-terms';
 import { type Contract, ContractsApi } from './contracts-api';
@@ -83,7 +86,7 @@ export class ContractForm implements HasChanges {
 
   protected readonly kinds = kinds;
   protected readonly shifts = shifts;
-  protected readonly form = contractForm(inject(NonNullableFormBuilder));
+  protected readonly form = contractForm(inject(NonNullableFormBuilder), this.#firstOfNext());
   protected readonly stores = this.form.controls.stores;
 
   protected readonly contract = rxResource({
@@ -168,6 +171,12 @@ export class ContractForm implements HasChanges {
       this.clientId();
       if (!this.contractId()) this.form.fillStores([]);
     });
+  }
+
+  /** Contracts begin with a month, as their fees do. */
+  #firstOfNext(): string {
+    const month = dayIn(inject(Reading).zone(), new Date()).slice(0, 7);
+    return `${monthsLater(month, 1)}-01`;
   }
 
   hasChanges(): boolean {

@@ -37,8 +37,8 @@ interface StoreControls {
   monthlyFee: FormControl<number | null>;
 }
 
-/** The terms of a contract as a form; named as the contract of the API names them. */
-export function contractForm(build: NonNullableFormBuilder) {
+/** The terms of a contract as a form; its fields are named as the API names them. */
+export function contractForm(build: NonNullableFormBuilder, startsOn: string) {
   const stores: FormArray<FormGroup<StoreControls>> = build.array<FormGroup<StoreControls>>(
     [],
     Validators.required,
@@ -47,7 +47,7 @@ export function contractForm(build: NonNullableFormBuilder) {
     clientId: ['', Validators.required],
     name: ['', rulesFor('contracts.create', 'name')],
     rule: [ruleOf(usualRule), rulesFor('contracts.create', 'rule')],
-    startsOn: ['', Validators.required],
+    startsOn: [startsOn, Validators.required],
     endsOn: [''],
     startTime: ['09:00', Validators.required],
     shift: ['next' as Contract['shift']],

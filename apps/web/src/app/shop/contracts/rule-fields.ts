@@ -34,18 +34,18 @@ import { ruleOf, type RuleValues, usualRule, valuesOf } from './rule-values';
               [options]="weekdays"
               [control]="form.controls.weekday"
             />
-            <tw-number-field label="Every" unit="months" [control]="form.controls.every" />
+            <tw-number-field label="Every" [unit]="unit('month')" [control]="form.controls.every" />
           </div>
         }
         @case ('day_of_month') {
           <div class="beside">
             <tw-select-field label="Date" [options]="dates" [control]="form.controls.monthDay" />
-            <tw-number-field label="Every" unit="months" [control]="form.controls.every" />
+            <tw-number-field label="Every" [unit]="unit('month')" [control]="form.controls.every" />
           </div>
         }
         @case ('weeks') {
           <tw-choices legend="On" many [choices]="weekdays" formControlName="weekdays" />
-          <tw-number-field label="Every" unit="weeks" [control]="form.controls.every" />
+          <tw-number-field label="Every" [unit]="unit('week')" [control]="form.controls.every" />
         }
         @case ('own') {
           <tw-text-field
@@ -92,6 +92,10 @@ export class RuleFields {
     initialValue: usualRule.pattern,
   });
 
+  readonly #every = toSignal(this.form.controls.every.valueChanges, {
+    initialValue: usualRule.every,
+  });
+
   constructor() {
     effect((onCleanup) => {
       const control = this.control();
@@ -113,6 +117,10 @@ export class RuleFields {
       if (this.form.dirty) control.markAsDirty();
       control.setValue(rule);
     });
+  }
+
+  protected unit(one: string): string {
+    return this.#every() === 1 ? one : `${one}s`;
   }
 
   #values(): RuleValues {

@@ -17,6 +17,13 @@ import { monthsLater } from './months';
       min-inline-size: 0;
       overflow-x: auto;
     }
+    th,
+    td {
+      padding-inline: 0.5rem;
+    }
+    tbody th {
+      min-inline-size: 7rem;
+    }
     .foot {
       margin-block: 0.75rem 0;
       font-size: 0.875rem;

@@ -23,7 +23,7 @@ interface Group {
   imports: [RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <h2>Unfinished</h2>
+    <h2>{{ closed() ? 'Not on these statements' : 'Unfinished' }}</h2>
     @for (group of groups(); track group.words) {
       <details [open]="group.items.length < 4">
         <summary>{{ group.words }}</summary>
@@ -42,7 +42,9 @@ interface Group {
         </ul>
       </details>
     } @empty {
-      <p class="tw-soft">Nothing. Every visit is signed off, and every store has a recipient.</p>
+      <p class="tw-soft">
+        Nothing: every visit is signed off, and somebody gets each store’s statement.
+      </p>
     }
   `,
   styles: `
@@ -75,6 +77,8 @@ export class UnfinishedList {
   readonly #reading = inject(Reading);
 
   readonly unfinished = input.required<Preview['unfinished']>();
+  /** The statements are made: what was not finished stands on later ones. */
+  readonly closed = input(false);
 
   protected readonly groups = computed<readonly Group[]>(() => {
     const { visits, rulings, withoutRecipient } = this.unfinished();

@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  computed,
   effect,
   inject,
   input,
@@ -16,7 +17,6 @@ import {
   ChoiceChips,
   dayIn,
   FormNotes,
-  MoneyText,
   PageHead,
   Reading,
   SelectField,
@@ -29,8 +29,8 @@ import { Messages } from '../../core/messages/messages';
 import { moneyWords } from '../money/money-words';
 import { StoreChoices } from '../stores/store-choices';
 import { nameOf } from './payment-words';
-import { type Payment, PaymentsApi } from './payments-api';
-import { settledWords } from './settled-words';
+import { type Payment, PaymentsApi, type StoreBalance } from './payments-api';
+import { owedWords, settledWords } from './settled-words';
 
 type Method = 'transfer' | 'cheque' | 'cash';
 const methods: readonly Choice<Method>[] = [
@@ -47,7 +47,6 @@ const methods: readonly Choice<Method>[] = [
     ChoiceChips,
     FormNotes,
     MatButton,
-    MoneyText,
     PageHead,
     ReactiveFormsModule,
     RouterLink,
@@ -86,10 +85,13 @@ export class PaymentForm implements HasChanges {
     words: ['', rulesFor('payments.record', 'words')],
   });
   readonly #chosen = toSignal(this.form.controls.storeId.valueChanges, { initialValue: '' });
-  protected readonly balance = rxResource({
+  readonly #balance = rxResource({
     params: () => this.#chosen() || undefined,
     stream: ({ params }) => this.#api.balanceOf(params),
   });
+  protected readonly owed = computed(() =>
+    this.#balance.hasValue() ? this.#balance.value() : undefined,
+  );
 
   protected readonly saving = submission(this.form, (key) => this.#send(key), {
     done: (payment) => this.#saved(payment),
@@ -108,6 +110,10 @@ export class PaymentForm implements HasChanges {
 
   hasChanges(): boolean {
     return this.form.dirty;
+  }
+
+  protected owedWords(store: StoreBalance): string {
+    return owedWords(store, this.#money);
   }
 
   protected takeAll(amount: number): void {

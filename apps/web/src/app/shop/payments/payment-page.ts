@@ -53,6 +53,9 @@ import { PaymentsApi } from './payments-api';
     h2 {
       margin-block: 0 0.5rem;
     }
+    .written {
+      margin: 1rem 0 0;
+    }
     h2 ~ h2 {
       margin-block-start: 1.5rem;
     }

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
-import { InstantPipe, ListShell, listState, PageHead } from '@lib/ui';
+import { InstantPipe, LabelPipe, ListShell, listState, PageHead } from '@lib/ui';
 import { RouterLink } from '@angular/router';
 import { RowsExport } from '../../core/lists/rows-export';
 import { detailsWords, subjectLink } from './audit-words';
@@ -8,7 +8,7 @@ import { type AuditRow, SubscriptionApi } from './subscription-api';
 /** Who did what in the shop: an owner's look over everybody's shoulder. */
 @Component({
   selector: 'tw-audit-list',
-  imports: [InstantPipe, ListShell, PageHead, RouterLink],
+  imports: [InstantPipe, LabelPipe, ListShell, PageHead, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <tw-page-head
@@ -37,21 +37,27 @@ import { type AuditRow, SubscriptionApi } from './subscription-api';
           @for (row of rows.items(); track row.id) {
             @let link = subjectLink(row);
             <tr>
-              <td data-label="When">{{ row.at | twInstant }}</td>
+              <td data-label="When" class="when">{{ row.at | twInstant }}</td>
               <td data-label="Who">{{ row.byName ?? 'by itself' }}</td>
               <th scope="row">
                 @if (link) {
-                  <a [routerLink]="link">{{ row.what }}</a>
+                  <a [routerLink]="link">{{ row.what | twLabel }}</a>
                 } @else {
-                  {{ row.what }}
+                  {{ row.what | twLabel }}
                 }
               </th>
-              <td data-label="Details" class="tw-soft">{{ detailsWords(row) }}</td>
+              @let details = detailsWords(row);
+              <td [attr.data-label]="details ? 'Details' : null" class="tw-soft">{{ details }}</td>
             </tr>
           }
         </tbody>
       </table>
     </tw-list-shell>
+  `,
+  styles: `
+    .when {
+      white-space: nowrap;
+    }
   `,
 })
 export class AuditList {

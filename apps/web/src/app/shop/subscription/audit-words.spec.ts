@@ -7,8 +7,12 @@ describe('audit rows in words', () => {
   });
 
   it('name other details, and leave out what is empty', () => {
-    const details = { month: '2031-05', storeIds: ['a', 'b'], note: null, hours: 4 };
-    expect(detailsWords({ details })).toBe('month 2031-05, store ids a and b, hours 4');
+    const details = { month: '2031-05', kinds: ['top_loader', 'dryer'], note: null, hours: 4 };
+    expect(detailsWords({ details })).toBe('month 2031-05, kinds top loader and dryer, hours 4');
+    const id = '01a231d1-9a18-764e-aad6-86bed2001f97';
+    expect(detailsWords({ details: { lines: [`job:${id}:labour`], bearer: 'shop' } })).toBe(
+      'bearer shop',
+    );
     expect(detailsWords({ details: {} })).toBe('');
   });
 

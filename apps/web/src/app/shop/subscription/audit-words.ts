@@ -4,6 +4,7 @@ import { type AuditRow } from './subscription-api';
 /** The page of what an act was done to, by its kind. */
 const places: Readonly<Record<string, string>> = {
   visit: '/shop/visits',
+  ticket: '/shop/tickets',
   call: '/shop/calls',
   machine: '/shop/machines',
   store: '/shop/stores',
@@ -40,6 +41,8 @@ export function detailsWords({ details }: Pick<AuditRow, 'details'>): string {
 
 function detail(name: string, value: unknown): string {
   if (value === null || value === '' || value === undefined) return '';
+  // Ids say nothing to a person; what they name is behind the row's link.
+  if (/[0-9a-f]{8}-[0-9a-f]{4}-/.test(JSON.stringify(value))) return '';
   // What somebody wrote speaks for itself.
   if (name === 'words' || name === 'reason') return String(value);
   const text = Array.isArray(value)

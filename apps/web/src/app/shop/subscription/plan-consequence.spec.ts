@@ -20,8 +20,8 @@ describe('planConsequence', () => {
   it('compares the price for who pays already, and names what is above a smaller plan', () => {
     const present = { state: 'active', usage, plan: workshop } as const;
     expect(planConsequence(present, bench, money)).toBe(
-      '$49 a month instead of $129, from the next bill on. You have 18 stores where it has room ' +
-        'for 15, and 7 crew where it has room for 3: all of it stays, and nothing can be added.',
+      '$49 a month instead of $129, from the next bill on. If no card is on record yet, the ' +
+        'next page asks for one. You have 18 stores where it has room for 15, and 7 crew where it has room for 3: all of it stays, and nothing can be added.',
     );
   });
 

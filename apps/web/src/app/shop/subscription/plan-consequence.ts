@@ -12,7 +12,7 @@ export function planConsequence(
   const price =
     present.state === 'active'
       ? `${money(plan.monthlyAmount)} a month instead of ${money(present.plan.monthlyAmount)}, ` +
-        'from the next bill on.'
+        'from the next bill on. If no card is on record yet, the next page asks for one.'
       : `${money(plan.monthlyAmount)} a month. You give a card on the next page.`;
   const limits = { stores: plan.storeLimit, machines: plan.machineLimit, crew: plan.crewLimit };
   const above = present.usage
