@@ -47,6 +47,9 @@ const states: readonly DeliveryState[] = ['waiting', 'handing_over', 'sent', 'fa
       font-size: 0.875rem;
       overflow-wrap: anywhere;
     }
+    .made {
+      white-space: nowrap;
+    }
     tw-callout {
       margin-block-end: 1rem;
     }

@@ -59,6 +59,7 @@ export function documentWords(kind: DocumentKind): string {
 /** Where a document can be looked at; none for those without a page of their own. */
 export function documentLink(kind: DocumentKind, id: string): readonly string[] | undefined {
   if (kind === 'statement') return ['/shop/statements', id];
+  if (kind === 'ticket' || kind === 'absorbed') return ['/shop/tickets', id];
   if (kind === 'payment') return ['/shop/payments', id];
   return undefined;
 }

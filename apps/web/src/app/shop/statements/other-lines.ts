@@ -1,17 +1,17 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { DayPipe, MoneyText } from '@lib/ui';
+import { DayPipe, MoneyText, SectionHead } from '@lib/ui';
 import { moneySign } from '../money/money-sign';
 import { type Statement } from './statements-api';
 
 /** What stands on a statement beside visits: fees, late charges, credits and payments. */
 @Component({
   selector: 'tw-other-lines',
-  imports: [DayPipe, MoneyText, RouterLink],
+  imports: [DayPipe, MoneyText, RouterLink, SectionHead],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @if (lines().length) {
-      <h2>Besides visits</h2>
+      <tw-section-head heading="Besides visits" />
       <table class="tw-table">
         <thead>
           <tr>

@@ -1,5 +1,5 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { counted, DayPipe, MoneyText, MonthPipe, TicketCard } from '@lib/ui';
+import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { counted, DayPipe, MoneyText, moneyText, MonthPipe, Reading, TicketCard } from '@lib/ui';
 import { type Statement } from './statements-api';
 
 /** The statement as a ticket: whose, which, until when and how much on the stub; why beside it. */
@@ -103,6 +103,8 @@ import { type Statement } from './statements-api';
   `,
 })
 export class StatementTicket {
+  readonly #reading = inject(Reading);
+
   readonly statement = input.required<Statement>();
 
   protected readonly headWords = computed(() => {
@@ -112,8 +114,11 @@ export class StatementTicket {
     return `${counted(visits.length, 'visit')}, ${counted(machines.size, 'machine')} worked on`;
   });
   protected readonly standsWords = computed(() => {
-    const { state, toPay } = this.statement();
+    const { state, toPay, closing, currency } = this.statement();
     if (state === 'paid') return 'paid';
-    return toPay > 0 ? state : 'nothing to pay';
+    if (toPay <= 0) return 'nothing to pay';
+    if (toPay === closing) return state;
+    // Something was paid since, or came due before it.
+    return `${state}, ${moneyText(toPay, currency, this.#reading.locale())} to pay now`;
   });
 }
