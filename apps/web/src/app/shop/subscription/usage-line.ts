@@ -17,11 +17,8 @@ import { type Usage } from './subscription-api';
       display: block;
       --level: var(--tw-carbon);
     }
-    :host([data-level='near']) {
+    :host(:not([data-level='within'])) {
       --level: var(--tw-ochre);
-    }
-    :host([data-level='at']) {
-      --level: var(--tw-alarm);
     }
     .track {
       block-size: 0.5rem;
