@@ -14,6 +14,7 @@ interface Sent {
   readonly params?: Record<string, string>;
   readonly query?: Record<string, unknown>;
   readonly body?: unknown;
+  readonly ifMatch?: number;
 }
 
 /** An answer, a refusal, or what makes one of what was asked. */

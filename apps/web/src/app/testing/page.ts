@@ -5,6 +5,7 @@ import { type HarnessLoader } from '@angular/cdk/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { TestBed } from '@angular/core/testing';
 import { MatButtonHarness } from '@angular/material/button/testing';
+import { MatCheckboxHarness } from '@angular/material/checkbox/testing';
 import { MatFormFieldHarness } from '@angular/material/form-field/testing';
 import { MatInputHarness } from '@angular/material/input/testing';
 import { provideRouter, Router, withComponentInputBinding } from '@angular/router';
@@ -57,6 +58,11 @@ export class PageUnderTest {
       MatFormFieldHarness.with({ floatingLabelText: label }),
     );
     await (await field.getControl(MatInputHarness))?.setValue(value);
+  }
+
+  async check(label: string): Promise<void> {
+    const box = await this.loader.getHarness(MatCheckboxHarness.with({ label }));
+    await box.check();
   }
 
   async press(label: string): Promise<void> {

@@ -33,6 +33,12 @@ const askAgain = 3_000;
     section {
       margin-block-end: 1.5rem;
     }
+    tw-callout p {
+      margin-block-end: 0.5rem;
+    }
+    tw-callout p:last-child {
+      margin: 0;
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

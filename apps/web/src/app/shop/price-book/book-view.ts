@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { type ComparedSection } from './compare-books';
 
 /** An edition to be read, with what it changed beside it. */
@@ -17,25 +17,20 @@ import { type ComparedSection } from './compare-books';
           <tr>
             <th scope="col">Rule</th>
             <th scope="col">Says</th>
-            @if (compares()) {
-              <th scope="col">Said before</th>
-            }
           </tr>
         </thead>
         <tbody>
           @for (line of part.lines; track line.key) {
             <tr [class.chosen]="line.before !== undefined">
               <th scope="row">{{ line.label }}</th>
-              <td class="tw-figures">{{ line.gone ? 'gone' : line.value }}</td>
-              @if (compares()) {
-                <td class="tw-figures tw-soft">
-                  @if (line.before === null) {
-                    new
-                  } @else if (line.before !== undefined) {
-                    before: {{ line.before }}
-                  }
-                </td>
-              }
+              <td class="tw-figures">
+                {{ line.gone ? 'gone' : line.value }}
+                @if (line.before === null) {
+                  <span class="before tw-soft">new</span>
+                } @else if (line.before !== undefined) {
+                  <span class="before tw-soft">before: {{ line.before }}</span>
+                }
+              </td>
             </tr>
           }
         </tbody>
@@ -54,9 +49,11 @@ import { type ComparedSection } from './compare-books';
     td {
       overflow-wrap: anywhere;
     }
+    .before {
+      margin-inline-start: 0.75rem;
+    }
   `,
 })
 export class BookView {
   readonly sections = input.required<readonly ComparedSection[]>();
-  protected readonly compares = computed(() => this.sections().some(({ changes }) => changes > 0));
 }

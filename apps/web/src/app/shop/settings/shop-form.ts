@@ -19,7 +19,12 @@ import { SettingsPart } from './settings-part';
       <tw-text-field label="Name" [control]="form.controls.name" autocomplete="organization" />
       <tw-words-field label="Address" [control]="form.controls.address" />
       <div class="beside">
-        <tw-text-field label="Telephone" type="tel" [control]="form.controls.phone" />
+        <tw-text-field
+          label="Telephone"
+          type="tel"
+          [control]="form.controls.phone"
+          hint="Like +1 555 0100"
+        />
         <tw-text-field label="Tax number" [control]="form.controls.taxNumber" />
       </div>
       <div class="beside">

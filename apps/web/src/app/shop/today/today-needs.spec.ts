@@ -27,13 +27,20 @@ describe('what needs somebody today', () => {
       month: '2031-05',
       mayClose: true,
       run: null,
-      totals: { stores: 8, closing: 308260 },
+      totals: { stores: 8, visits: 21, opening: 33250, charged: 287010, closing: 308260 },
       unfinished: { withoutRecipient: { count: 1 } },
     } as never as NonNullable<TodayFacts['close']>;
     const [need] = needsOf({ missing: 0, close }, readAs);
     expect(need?.words).toBe('May 2031 can be closed');
     expect(need?.detail).toBe('8 statements, $3,082.60 in all. 1 store with nobody to mail it to.');
     expect(ids({ close: { ...close, run: { id: 'r', state: 'sending' } } as never })).toEqual([]);
+  });
+
+  it('does not ask for the close of a month in which nothing was', () => {
+    const totals = { stores: 3, visits: 0, opening: 0, charged: 0, closing: 0 };
+    expect(
+      ids({ close: { month: '2031-05', mayClose: true, run: null, totals } as never }),
+    ).toEqual([]);
   });
 
   it('says a held close before anything about the next month', () => {

@@ -20,6 +20,7 @@ export interface ReadAs {
   readonly currency: string;
 }
 
+type CloseTotals = NonNullable<TodayFacts['close']>['totals'];
 type Judge = (facts: TodayFacts, readAs: ReadAs) => Need | undefined;
 
 /** In the order in which an owner would want to be asked. */
@@ -103,7 +104,7 @@ const close: Judge = ({ close, runs }, { locale, currency }) => {
       pressing: true,
     };
   }
-  if (!close?.mayClose || close.run || close.totals.stores === 0) return undefined;
+  if (!close?.mayClose || close.run || isEmpty(close.totals)) return undefined;
   const total = moneyText(close.totals.closing, currency, locale);
   return {
     id: 'close',
@@ -115,6 +116,11 @@ const close: Judge = ({ close, runs }, { locale, currency }) => {
     pressing: false,
   };
 };
+
+/** A month in which nothing was done and nothing is owed need not be closed to be told of. */
+function isEmpty({ visits, opening, charged, closing }: CloseTotals): boolean {
+  return visits === 0 && opening === 0 && charged === 0 && closing === 0;
+}
 
 function unfinishedWords({ unfinished }: NonNullable<TodayFacts['close']>): string {
   const without = unfinished.withoutRecipient.count;
