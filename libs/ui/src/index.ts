@@ -41,6 +41,7 @@ export {
   copyEdges,
   type SchemePair,
 } from './tokens/tokens';
+export { conditionWords, type ConditionWords } from './words/condition-words';
 export { counted, labelFor, LabelPipe, wordFor, WordPipe } from './words/words';
 export { AmountField } from './fields/amount-field';
 export { AmountInput } from './fields/amount-input';

@@ -1,8 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { ClockPipe, counted, TicketCard, WordPipe } from '@lib/ui';
+import { ClockPipe, conditionWords, counted, TicketCard, WordPipe } from '@lib/ui';
 import { type Sheet } from '../kept/kept';
-import { conditionWords } from '../visit/condition-words';
 
 /** A visit of the day: when, where, how to get in, and what changes the work. */
 @Component({

@@ -16,6 +16,7 @@ import {
   AmountField,
   Callout,
   ChoiceChips,
+  conditionWords,
   CountStepper,
   labelFor,
   PageHead,
@@ -29,7 +30,6 @@ import { Titles } from '../../core/navigation/titles';
 import { OutboxLine } from '../outbox/outbox-line';
 import { PartBook } from '../parts/part-book';
 import { FieldVisit } from '../sheets/field-visit';
-import { conditionWords } from '../visit/condition-words';
 import { workMinutes } from '../visit/work-minutes';
 import { BecauseOf } from './because-of';
 import { JobCautions } from './job-cautions';

@@ -10,12 +10,20 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { Callout, clockText, FloorPlan, PageHead, ProblemNote, Reading, WordPipe } from '@lib/ui';
+import {
+  Callout,
+  clockText,
+  conditionWords,
+  FloorPlan,
+  PageHead,
+  ProblemNote,
+  Reading,
+  WordPipe,
+} from '@lib/ui';
 import { type Sheet, type SheetCall, type SheetMachine } from '../kept/kept';
 import { OutboxLine } from '../outbox/outbox-line';
 import { FieldVisit } from '../sheets/field-visit';
 import { CallNote } from './call-note';
-import { conditionWords } from './condition-words';
 import { JobTicket } from './job-ticket';
 import { NothingFound } from './nothing-found';
 import { sheetFloor } from './sheet-floor';

@@ -1,4 +1,4 @@
-import { actWords } from './act-words';
+import { actWords, withTicksTogether } from './act-words';
 import { type Visit, type VisitAct } from './visits-api';
 
 const visit = { jobList: [{ id: 'job', machine: { bay: 'A-04' } }] } as unknown as Visit;
@@ -52,5 +52,29 @@ describe('the record of a visit in words', () => {
     ['kind_of_a_later_version', {}, 'kind of a later version'],
   ])('%s', (kind, payload, words) => {
     expect(actWords(act(kind, payload), visit).words).toBe(words);
+  });
+
+  it('puts ticks that follow one another together, and no others', () => {
+    const tick = (jobId: string, caution: string) =>
+      act('cautions_ticked', { jobId, cautions: [caution] });
+    const acts = [
+      act('arrived'),
+      tick('job', 'isolate'),
+      tick('job', 'prove_dead'),
+      tick('other', 'isolate'),
+      act('cause', { jobId: 'job', cause: 'wear' }),
+      tick('job', 'let_cool'),
+    ];
+    const counts = withTicksTogether(acts).map(({ kind, payload }) => [
+      kind,
+      (payload['cautions'] as unknown[] | undefined)?.length,
+    ]);
+    expect(counts).toEqual([
+      ['arrived', undefined],
+      ['cautions_ticked', 2],
+      ['cautions_ticked', 1],
+      ['cause', undefined],
+      ['cautions_ticked', 1],
+    ]);
   });
 });

@@ -7,6 +7,29 @@ export interface ActWords {
   readonly words: string;
 }
 
+/** Ticks that follow one another as one line: a list of eight cautions says no more than their number. */
+export function withTicksTogether(acts: readonly VisitAct[]): VisitAct[] {
+  const together: VisitAct[] = [];
+  for (const act of acts) {
+    const before = together.at(-1);
+    const same =
+      before?.kind === 'cautions_ticked' &&
+      act.kind === 'cautions_ticked' &&
+      before.by === act.by &&
+      before.payload['jobId'] === act.payload['jobId'];
+    if (!same) together.push(act);
+    else {
+      const cautions = [...cautionsOf(before), ...cautionsOf(act)];
+      together[together.length - 1] = { ...act, payload: { ...act.payload, cautions } };
+    }
+  }
+  return together;
+}
+
+function cautionsOf({ payload }: VisitAct): readonly unknown[] {
+  return (payload['cautions'] as readonly unknown[] | undefined) ?? [];
+}
+
 type Payload = Readonly<Record<string, unknown>>;
 
 /** The record of a visit for people; kinds this version does not know yet are named as they are. */
@@ -30,7 +53,11 @@ function words(kind: string, payload: Payload): string {
     case 'cautions_ticked':
       return `Ticked ${counted((payload['cautions'] as unknown[] | undefined)?.length ?? 0, 'caution')}`;
     case 'finding':
-      return said('Found', [payload['code'] ? wordFor(text('code')) : '', text('words')]);
+      return said('Found', [
+        payload['code'] ? wordFor(text('code')) : '',
+        text('words'),
+        payload['category'] ? `of the ${text('category')}` : '',
+      ]);
     case 'cause':
       return `Cause: ${wordFor(text('cause'))}`;
     case 'action':
@@ -57,7 +84,10 @@ function words(kind: string, payload: Payload): string {
     case 'warranty_marked':
       return payload['mark'] === 'none'
         ? 'Took the warranty mark off'
-        : said(`Marked as ${wordFor(text('mark'))}`, [text('words')]);
+        : said(`Marked as ${wordFor(text('mark'))}`, [
+            text('words'),
+            payload['causedByJobId'] ? 'because of an earlier job' : '',
+          ]);
     case 'nothing_found':
       return `Nothing found: ${counted(number('cycles'), 'cycle')} run, ${minutesText(number('minutes'))}`;
     case 'job_done':

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal } f
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { InstantPipe, LoadNote, SectionHead } from '@lib/ui';
-import { actWords } from './act-words';
+import { actWords, withTicksTogether } from './act-words';
 import { type Visit, type VisitAct, VisitsApi } from './visits-api';
 
 /** Later than this after it happened, an act came from a phone that had no signal. */
@@ -70,7 +70,7 @@ export class VisitActs {
     stream: ({ params }) => this.#api.acts(params.id),
   });
   protected readonly lines = computed(() =>
-    (this.acts.hasValue() ? this.acts.value().items : []).map((act) => ({
+    withTicksTogether(this.acts.hasValue() ? this.acts.value().items : []).map((act) => ({
       act,
       late: isLate(act),
       ...actWords(act, this.visit()),

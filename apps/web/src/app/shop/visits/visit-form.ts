@@ -20,6 +20,7 @@ import { type BodyOf } from '@lib/contracts/web';
 import {
   Callout,
   ChoiceChips,
+  conditionWords,
   counted,
   dayIn,
   dayText,
@@ -128,6 +129,9 @@ export class VisitForm implements HasChanges {
   );
   protected readonly heading = computed(() =>
     this.visit.hasValue() ? `Change visit ${this.visit.value().number}` : 'Plan a visit',
+  );
+  protected readonly conditions = computed(() =>
+    this.store.hasValue() ? this.store.value().conditions.map(conditionWords) : [],
   );
   protected readonly zoneHint = computed(() => {
     const zone = this.store.hasValue() ? this.store.value().zone : null;

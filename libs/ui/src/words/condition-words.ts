@@ -1,5 +1,10 @@
-import { minutesText } from '@lib/ui';
-import { type Sheet } from '../kept/kept';
+import { type AnswerOf } from '@lib/contracts/web';
+import { minutesText } from '../format/times';
+
+type Condition = Pick<
+  AnswerOf<'conditions.list'>['items'][number],
+  'id' | 'kind' | 'machine' | 'words' | 'extraMinutes' | 'tool'
+>;
 
 export interface ConditionWords {
   readonly id: string;
@@ -7,8 +12,8 @@ export interface ConditionWords {
   readonly words: string;
 }
 
-/** "A-06: folding table across. 20 min more. Bring the long bar." */
-export function conditionWords(condition: Sheet['conditions'][number]): ConditionWords {
+/** "A-06: folding table across. 20 min more. Bring: long bar." */
+export function conditionWords(condition: Condition): ConditionWords {
   const { id, kind, machine, words, extraMinutes, tool } = condition;
   const parts = [
     ended(machine ? `${machine.bay}: ${words}` : words),
