@@ -26,8 +26,10 @@ import { RouterLink } from '@angular/router';
       margin-block-end: 1.5rem;
     }
     .up {
-      display: inline-block;
-      padding-block: 0.25rem;
+      display: inline-flex;
+      align-items: center;
+      min-inline-size: var(--tw-touch);
+      min-block-size: var(--tw-touch);
       font-size: 0.875rem;
     }
     .row {
