@@ -19,6 +19,8 @@ export class FieldFrame {
   protected readonly items: readonly NavItem[] = [
     { label: 'Day', link: '/field/day' },
     { label: 'Entries', link: '/field/outbox' },
+    // In a small shop the owner goes out too.
+    { label: 'Shop', link: '/shop/today', needs: 'visits.plan' },
     { label: 'Account', link: '/account' },
   ];
 

@@ -16,6 +16,7 @@ export class ShopFrame {
     { label: 'Calls', link: '/shop/calls', needs: 'calls.read' },
     { label: 'Visits', link: '/shop/visits', needs: 'visits.read' },
     { label: 'Day sheet', link: '/shop/day-sheet', needs: 'visits.plan' },
+    { label: 'Own day', link: '/field/day', needs: 'visits.record' },
     { label: 'Rulings', link: '/shop/rulings', needs: 'rulings.read' },
     { label: 'Tickets', link: '/shop/tickets', needs: 'tickets.read' },
     { label: 'Clients', link: '/shop/clients', needs: 'clients.read', group: 'Clients' },
