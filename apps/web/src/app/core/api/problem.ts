@@ -36,6 +36,8 @@ export function problemFrom(error: unknown): Problem {
   if (!(error instanceof HttpErrorResponse) || error.status === 0) return noAnswer();
   const document = documentIn(error.error);
   if (!document) {
+    // What the service worker answers by itself when it finds no connection.
+    if (error.status === 504) return noAnswer();
     // A proxy's page or a cut-off answer: not from the API itself.
     const kind: ProblemKind = error.status === 404 ? 'not-found' : 'unavailable';
     return new Problem(kind, error.status, 'The service did not answer as expected. Try again.');
