@@ -16,7 +16,7 @@ import { Sender } from './sender';
       } @else if (held(); as words) {
         <span>{{ words }}</span>
       } @else {
-        <span>{{ outbox.waiting().length ? 'Sending' : 'Everything is sent' }}</span>
+        <span>{{ allWell() }}</span>
       }
       <a routerLink="/field/outbox" class="tw-figures" [class.needy]="outbox.refused().length > 0">
         {{ counts() }}
@@ -59,6 +59,10 @@ export class OutboxLine {
   protected readonly held = computed(() => {
     const problem = this.outbox.waiting().length > 0 ? this.#sender.heldUpBy() : undefined;
     return problem && problemText(problem);
+  });
+  protected readonly allWell = computed(() => {
+    if (this.outbox.waiting().length > 0) return 'Sending';
+    return this.outbox.refused().length > 0 ? 'Not everything was taken' : 'Everything is sent';
   });
   protected readonly counts = computed(() => {
     const refused = this.outbox.refused().length;

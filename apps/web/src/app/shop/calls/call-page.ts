@@ -55,6 +55,13 @@ import { type Call, CallsApi } from './calls-api';
   providers: [OpenForms],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './call-page.html',
+  styles: `
+    tw-call-change,
+    tw-call-withdraw {
+      display: block;
+      margin-block-end: 1.5rem;
+    }
+  `,
 })
 export class CallPage implements HasChanges {
   readonly #api = inject(CallsApi);

@@ -55,6 +55,10 @@ import { type Visit, VisitsApi } from './visits-api';
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './visit-page.html',
   styles: `
+    tw-visit-cancel {
+      display: block;
+      margin-block-end: 1.5rem;
+    }
     ul {
       margin: 0 0 1rem;
       padding: 0;
