@@ -79,11 +79,18 @@ export class PageUnderTest {
     return call.request.body;
   }
 
-  /** Lets everything that waits for a promise go on, and shows it. */
+  /**
+   * Lets everything that waits for a promise go on, and shows it. A page that loads something is not
+   * stable before the spec answers, so it is not waited for longer than drawing takes.
+   */
   async rest(): Promise<void> {
     await settled();
-    await this.#harness.fixture.whenStable();
+    await Promise.race([this.#harness.fixture.whenStable(), drawn()]);
   }
+}
+
+function drawn(): Promise<void> {
+  return new Promise((resolve) => setTimeout(resolve, 25));
 }
 
 /** A problem document as the server answers it. */
