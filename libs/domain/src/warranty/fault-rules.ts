@@ -7,7 +7,8 @@ import { type Weighing } from './weighing';
 /** Whose fault it was, by the tech's word. A mistake of the shop's own is always the shop's. */
 export function weighMark(weighing: Weighing): void {
   const { job } = weighing.context;
-  const note = job.markNote ? `: ${job.markNote}` : '';
+  // The sentence ends itself, however the tech ended theirs.
+  const note = job.markNote ? `: ${job.markNote.replace(/\.$/, '')}` : '';
   const params = { by: job.markedBy, note: job.markNote ?? '' };
   if (job.mark === 'own_mistake') {
     const words = `${job.markedBy} marked it as our own mistake${note}.`;

@@ -45,7 +45,7 @@ describe('proposeRuling', () => {
     const { reasons } = proposeRuling(
       { ...partLine, list: 171_00 },
       sampleCase(
-        { mark: 'own_mistake', markNote: 'hinge fitted crooked', causedBy: hinge },
+        { mark: 'own_mistake', markNote: 'hinge fitted crooked.', causedBy: hinge },
         { machineSupplierWarrantyUntil: '2031-12-31' },
       ),
     );
