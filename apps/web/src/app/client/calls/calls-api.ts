@@ -23,7 +23,11 @@ export class CallsApi {
   }
 
   withdraw({ id, version }: Pick<Call, 'id' | 'version'>) {
-    return this.#api.call('calls.withdraw', { params: { callId: id }, ifMatch: version });
+    return this.#api.call('calls.withdraw', {
+      params: { callId: id },
+      body: {},
+      ifMatch: version,
+    });
   }
 
   /** With an id of our own, so that sending it again after no answer adds it once. */

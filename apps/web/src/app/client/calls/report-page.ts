@@ -53,6 +53,11 @@ import { notArrived, SendPhotos } from './send-photos';
       max-inline-size: 44rem;
       gap: 1.25rem;
     }
+    @media (max-width: 40rem) {
+      tw-floor {
+        --tw-glyph: 2.25rem;
+      }
+    }
     .question {
       margin: 0 0 0.375rem;
       font-weight: 500;

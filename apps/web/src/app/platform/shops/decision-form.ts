@@ -15,7 +15,7 @@ import { type Consequence, type Decision } from './shop-words';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <form class="tw-form tw-sheet" novalidate [formGroup]="form" (ngSubmit)="deciding.submit()">
-      <h3>{{ consequence().heading }}</h3>
+      <h2>{{ consequence().heading }}</h2>
       <tw-callout [tone]="consequence().destructive ? 'alarm' : 'plain'">
         {{ consequence().words }}
       </tw-callout>
@@ -41,7 +41,7 @@ import { type Consequence, type Decision } from './shop-words';
     </form>
   `,
   styles: `
-    h3 {
+    h2 {
       margin: 0;
     }
   `,

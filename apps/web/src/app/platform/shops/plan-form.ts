@@ -26,7 +26,7 @@ import { planConsequence } from './shop-words';
   template: `
     @if (plans.hasValue()) {
       <form class="tw-form tw-sheet" novalidate [formGroup]="form" (ngSubmit)="saving.submit()">
-        <h3>Put {{ shop().name }} on another plan</h3>
+        <h2>Put {{ shop().name }} on another plan</h2>
         <tw-form-notes [notes]="saving.notes()" />
         <tw-select-field
           label="Plan"
@@ -57,7 +57,7 @@ import { planConsequence } from './shop-words';
     }
   `,
   styles: `
-    h3 {
+    h2 {
       margin: 0;
     }
   `,
