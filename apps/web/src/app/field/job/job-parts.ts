@@ -43,7 +43,7 @@ const from: Record<SheetJob['parts'][number]['source'], string> = {
         type="button"
         disabledInteractive
         [disabled]="locked()"
-        (click)="adding.set(true)"
+        (click)="adding.set(!locked())"
       >
         Add a part
       </button>

@@ -48,7 +48,8 @@ export class SignOffPage {
   }
 
   protected async signOff(preview: TicketPreview): Promise<void> {
-    if (this.busy()) return;
+    // Such a button can be reached and read though it is disabled, and so it can be pressed.
+    if (this.busy() || preview.blockers.length > 0) return;
     this.busy.set(true);
     this.problem.set('');
     try {
