@@ -21,6 +21,7 @@ export default defineConfig({
     locale: 'en-US',
     timezoneId: 'America/Chicago',
     actionTimeout: 20_000,
+    serviceWorkers: 'block',
     screenshot: 'only-on-failure',
     trace: 'retain-on-failure',
     contextOptions: { reducedMotion: 'reduce' },

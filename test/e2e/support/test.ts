@@ -1,4 +1,4 @@
-import { type BrowserContext, test as base } from '@playwright/test';
+import { type BrowserContext, type BrowserContextOptions, test as base } from '@playwright/test';
 import { Visitor } from './visitor';
 import { type Works, worksOf } from './works';
 
@@ -8,16 +8,19 @@ interface Fixtures {
   /** The shop whose subscription may be changed. */
   pausable: Works;
   /** Lets somebody in, each with a browser of their own; with an address, signed in. */
-  visitor(email?: string): Promise<Visitor>;
+  visitor(email?: string, options?: BrowserContextOptions): Promise<Visitor>;
 }
+
+/** What keeps the field area working without a signal; elsewhere it only loads everything twice. */
+export const worksOffline: BrowserContextOptions = { serviceWorkers: 'allow' };
 
 export const test = base.extend<Fixtures>({
   works: async ({}, use, { project }) => use(worksOf(project.name, 'work')),
   pausable: async ({}, use, { project }) => use(worksOf(project.name, 'subscription')),
   visitor: async ({ browser }, use) => {
     const contexts: BrowserContext[] = [];
-    await use(async (email) => {
-      const context = await browser.newContext();
+    await use(async (email, options) => {
+      const context = await browser.newContext(options);
       contexts.push(context);
       const visitor = new Visitor(await context.newPage());
       if (email !== undefined) await visitor.signIn(email);
