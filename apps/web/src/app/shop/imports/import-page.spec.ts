@@ -39,6 +39,12 @@ describe('ImportPage', () => {
     expect(api.sent('imports.rows')).toHaveLength(0);
   });
 
+  it('says that a file is being read before its rows are counted', async () => {
+    const { page } = await opened({ state: 'waiting', rowsTotal: 0, rowsDone: 0 });
+    expect(page.text).toContain('The file is being read.');
+    expect(page.text).not.toContain('0 of 0');
+  });
+
   it('offers to apply all rows once every row is good', async () => {
     const { page } = await opened({});
     expect(page.text).toContain('Applying it makes 12 new stores, 3 changed.');

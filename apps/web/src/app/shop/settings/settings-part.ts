@@ -33,6 +33,8 @@ export abstract class SettingsPart {
     effect(() => {
       const settings = this.settings();
       if (!form.dirty) form.reset(this.valuesOf(settings));
+      if (this.mayChange()) form.enable({ emitEvent: false });
+      else form.disable({ emitEvent: false });
     });
     const saving: Submission<ShopSettings> = submission(
       form,

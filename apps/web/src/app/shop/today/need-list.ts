@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { type Need } from './today-needs';
+import { type Need } from './need';
 
 /** What waits, one line each: the figure, the words, and the way there. */
 @Component({
@@ -42,8 +42,9 @@ import { type Need } from './today-needs';
     }
     li {
       display: flex;
+      flex-wrap: wrap;
       align-items: center;
-      gap: 1rem;
+      gap: 0 1rem;
       min-block-size: 3rem;
       padding: 0.625rem 1rem;
       border-inline-start: 4px solid transparent;
@@ -58,7 +59,7 @@ import { type Need } from './today-needs';
       color: var(--tw-alarm);
     }
     .what {
-      flex: 1;
+      flex: 1 1 14rem;
       min-inline-size: 0;
       overflow-wrap: anywhere;
     }

@@ -1,7 +1,7 @@
 import { type TodayFacts } from './today-facts';
 import { needsOf } from './today-needs';
 
-const readAs = { locale: 'en-US', currency: 'USD' };
+const readAs = { locale: 'en-US', currency: 'USD', today: '2031-06-01' };
 const list = (value: number, items: unknown[] = []) =>
   ({ items, next: null, count: { value, capped: false } }) as never;
 
@@ -59,6 +59,21 @@ describe('what needs somebody today', () => {
       words: 'The plan is full',
       detail: '8 of 8 stores in your plan: no more can be added.',
       pressing: true,
+    });
+  });
+
+  it('tells of a trial only when its end is near', () => {
+    const trial = (trialEndsAt: string) =>
+      ({ state: 'trialing', usage: [], trialEndsAt }) as never as TodayFacts['subscription'];
+    expect(ids({ subscription: trial('2031-06-20T00:00:00Z') })).toEqual([]);
+    expect(ids({ subscription: trial('2031-06-05T00:00:00Z') })).toEqual(['trial']);
+  });
+
+  it('says that a paused shop can write again by choosing a plan', () => {
+    const subscription = { state: 'paused', usage: [] } as never;
+    expect(needsOf({ missing: 0, subscription }, readAs)[0]).toMatchObject({
+      words: 'The shop is paused',
+      link: '/shop/subscription',
     });
   });
 

@@ -1,62 +1,15 @@
-import { counted, dayText, moneyText, monthText } from '@lib/ui';
+import { counted, moneyText, monthText } from '@lib/ui';
+import { type Judge, type Need, type ReadAs } from './need';
+import { subscription } from './subscription-need';
 import { type TodayFacts } from './today-facts';
 
-/** Something that waits for somebody now. */
-export interface Need {
-  readonly id: string;
-  /** The figure it is about; 0 where there is none. */
-  readonly count: number;
-  readonly words: string;
-  readonly detail?: string;
-  readonly link: string;
-  readonly query?: Readonly<Record<string, string>>;
-  readonly label: string;
-  /** Costs money or trust the longer it waits. */
-  readonly pressing: boolean;
-}
-
-export interface ReadAs {
-  readonly locale: string;
-  readonly currency: string;
-}
-
 type CloseTotals = NonNullable<TodayFacts['close']>['totals'];
-type Judge = (facts: TodayFacts, readAs: ReadAs) => Need | undefined;
 
 /** In the order in which an owner would want to be asked. */
 export function needsOf(facts: TodayFacts, readAs: ReadAs): Need[] {
   const found = judges.map((judge) => judge(facts, readAs)).filter((need) => need !== undefined);
   return [...found.filter((need) => need.pressing), ...found.filter((need) => !need.pressing)];
 }
-
-const subscription: Judge = ({ subscription }, { locale }) => {
-  if (subscription?.state === 'past_due') {
-    const until = subscription.graceEndsAt?.slice(0, 10);
-    return {
-      ...toSubscription,
-      id: 'past-due',
-      words: 'The subscription was not paid',
-      detail: until ? `The shop is paused after ${dayText(until, locale)}.` : undefined,
-      pressing: true,
-    };
-  }
-  const reached = subscription?.usage.filter(({ level }) => level !== 'within') ?? [];
-  const at = reached.some(({ level }) => level === 'at');
-  if (reached.length === 0) return undefined;
-  return {
-    ...toSubscription,
-    id: 'limits',
-    words: at ? 'The plan is full' : 'The plan is nearly full',
-    detail: reached.map(({ words }) => words).join(' '),
-    pressing: at,
-  };
-};
-
-const toSubscription = {
-  count: 0,
-  link: '/shop/subscription',
-  label: 'See the plan',
-} as const;
 
 const rulings: Judge = ({ rulings }) =>
   some(rulings, (count) => ({

@@ -45,6 +45,7 @@ export class TodayPage {
       ? needsOf(this.facts.value(), {
           locale: this.#reading.locale(),
           currency: this.#reading.currency(),
+          today: dayIn(this.#reading.zone(), new Date()),
         })
       : [],
   );
