@@ -55,6 +55,11 @@ import { type RulingGroup } from './ruling-groups';
     thead th {
       white-space: normal;
     }
+    @media (max-width: 22rem) {
+      table {
+        font-size: 0.8125rem;
+      }
+    }
     @media (max-width: 30rem) {
       th,
       td {
