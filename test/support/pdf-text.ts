@@ -50,8 +50,10 @@ function readTable(text: string): Map<string, string> {
   for (const block of text.matchAll(/beginbfrange([\s\S]*?)endbfrange/g)) {
     for (const range of (block[1] ?? '').matchAll(/<(\w+)> <(\w+)> \[([^\]]*)\]/g)) {
       const first = parseInt(range[1] ?? '', 16);
-      [...(range[3] ?? '').matchAll(/<(\w+)>/g)].forEach((code, index) => {
-        map.set((first + index).toString(16).padStart(4, '0'), unicode(code[1] ?? ''));
+      // A ligature stands for several characters, with spaces between their codes.
+      [...(range[3] ?? '').matchAll(/<([\w ]+)>/g)].forEach((code, index) => {
+        const codes = (code[1] ?? '').replaceAll(' ', '');
+        map.set((first + index).toString(16).padStart(4, '0'), unicode(codes));
       });
     }
   }
