@@ -1,6 +1,19 @@
 import { type Page } from '@playwright/test';
+import { pdfText } from '../support/pdf-text';
 import { attachment, mail } from './support/mail';
 import { expect, test } from './support/test';
+
+/** The charges of a statement as its PDF has them, in minor units: each document, then their sum. */
+function chargesIn(pdf: Buffer): { charged: number; tax: number; total: number }[] {
+  const [, table = ''] = pdfText(pdf).split('What stands behind it');
+  const amount = String.raw`(-?[\d,]+\.\d\d)`;
+  const triple = new RegExp(`^${amount}\\n${amount}\\n${amount}$`, 'gm');
+  return [...table.matchAll(triple)].map(([, ...texts]) => {
+    const minor = texts.map((text) => Number(text.replace(/[,.]/g, '')));
+    const [charged = NaN, tax = NaN, total = NaN] = minor;
+    return { charged, tax, total };
+  });
+}
 
 async function enterCard(page: Page, number: string): Promise<void> {
   await page.getByLabel('Card number').fill(number);
@@ -44,7 +57,13 @@ test('a month is closed once, mailed, and paid by card until nothing is owed', a
     expect(letter.html).toBeTruthy();
     const [pdf] = letter.attachments;
     expect(pdf).toMatchObject({ type: 'application/pdf' });
-    expect((await attachment(letter, 0)).subarray(0, 5).toString()).toBe('%PDF-');
+    const charges = chargesIn(await attachment(letter, 0));
+    const stated = charges.pop();
+    expect(charges.length).toBeGreaterThan(0);
+    for (const { charged, tax, total } of charges) expect(charged + tax).toBe(total);
+    for (const column of ['charged', 'tax', 'total'] as const) {
+      expect(charges.reduce((sum, one) => sum + one[column], 0)).toBe(stated?.[column]);
+    }
     return /Statement for (\w+ \d{4})/.exec(letter.subject)?.[1] as string;
   });
 
@@ -59,6 +78,9 @@ test('a month is closed once, mailed, and paid by card until nothing is owed', a
     await client.arrive(new RegExp(month));
     await client.sees('What was done');
     await client.sees(/All \d+ checks of its figures hold/);
+    const opened = client.page.waitForResponse((answer) => answer.url().endsWith('/pdf'));
+    await client.press('Open the PDF');
+    expect((await opened).headers()['content-type']).toBe('application/pdf');
   });
 
   await test.step('a declined card pays nothing', async () => {
