@@ -22,7 +22,8 @@ export const angularCli = path.join(root, 'node_modules/@angular/cli/bin/ng.js')
 async function build(): Promise<void> {
   await quietRun(process.execPath, [angularCli, 'build', '--configuration', 'production'], {
     cwd: root,
-    env: { ...process.env, NG_CLI_ANALYTICS: 'false', CI: '1' },
+    // Pieces that are always loaded together become one: fewer requests, and better compressed.
+    env: { ...process.env, NG_CLI_ANALYTICS: 'false', CI: '1', NG_BUILD_OPTIMIZE_CHUNKS: '1' },
   });
   await precompress(webOutput);
 }

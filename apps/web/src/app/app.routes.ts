@@ -1,4 +1,5 @@
 import { type Routes } from '@angular/router';
+import { SignIn } from './public/sign-in/sign-in';
 import { forRoles, knownPerson, signedIn, toOwnArea } from './core/session/guards';
 
 const noEntry = () => import('./core/pages/no-entry').then((m) => m.NoEntry);
@@ -46,7 +47,8 @@ export const routes: Routes = [
   {
     path: 'sign-in',
     title: 'Sign in',
-    loadComponent: () => import('./public/sign-in/sign-in').then((m) => m.SignIn),
+    // What most people see first comes with the first load, not after it in a dozen pieces.
+    component: SignIn,
   },
   {
     path: 'sign-up',

@@ -1,8 +1,8 @@
-import { LiveAnnouncer } from '@angular/cdk/a11y';
 import { afterNextRender, inject, Injectable, Injector } from '@angular/core';
 import { Title } from '@angular/platform-browser';
 import { NavigationEnd, Router } from '@angular/router';
 import { filter, map, pairwise, startWith } from 'rxjs';
+import { Announcer } from './announcer';
 
 /**
  * A change of page inside the application looks like nothing to a screen reader and leaves the focus
@@ -12,7 +12,7 @@ import { filter, map, pairwise, startWith } from 'rxjs';
 @Injectable({ providedIn: 'root' })
 export class Arrival {
   readonly #router = inject(Router);
-  readonly #announcer = inject(LiveAnnouncer);
+  readonly #announcer = inject(Announcer);
   readonly #title = inject(Title);
   readonly #injector = inject(Injector);
 
@@ -34,6 +34,6 @@ export class Arrival {
     const head = main?.querySelector<HTMLElement>('h1[tabindex]') ?? main;
     // A page that put the focus into its own form knows better.
     if (main && !main.contains(document.activeElement)) head?.focus({ preventScroll: true });
-    void this.#announcer.announce(this.#title.getTitle(), 'polite');
+    this.#announcer.announce(this.#title.getTitle());
   }
 }

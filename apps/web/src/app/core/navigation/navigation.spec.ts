@@ -1,10 +1,10 @@
-import { LiveAnnouncer } from '@angular/cdk/a11y';
 import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { Title } from '@angular/platform-browser';
 import { provideRouter, RouterOutlet, TitleStrategy } from '@angular/router';
 import { RouterTestingHarness } from '@angular/router/testing';
 import { settled } from '../../testing/session';
+import { Announcer } from './announcer';
 import { Arrival } from './arrival';
 import { mailedToken } from './mailed-token';
 import { Titles } from './titles';
@@ -49,7 +49,7 @@ describe('arriving at a page', () => {
     TestBed.configureTestingModule({
       providers: [
         { provide: TitleStrategy, useExisting: Titles },
-        { provide: LiveAnnouncer, useValue: { announce } },
+        { provide: Announcer, useValue: { announce } },
         provideRouter([
           {
             path: 'shop',
@@ -84,7 +84,7 @@ describe('arriving at a page', () => {
   it('announces the next page and moves the focus to its head', async () => {
     await harness.navigateByUrl('/shop/plain');
     await settled();
-    expect(announce).toHaveBeenCalledWith('Plain · Shop · Tumblewright', 'polite');
+    expect(announce).toHaveBeenCalledWith('Plain · Shop · Tumblewright');
     expect(document.activeElement?.tagName).toBe('MAIN');
     (document.activeElement as HTMLElement).blur();
     await harness.navigateByUrl('/shop/stores');
@@ -106,4 +106,20 @@ describe('arriving at a page', () => {
       expect(harness.routeNativeElement?.textContent).toBe('abc_1');
     },
   );
+});
+
+describe('announcing', () => {
+  it('changes an unseen live region that was there before, also for the same words', () => {
+    jest.useFakeTimers();
+    const announcer = TestBed.inject(Announcer);
+    const region = document.querySelector('[aria-live="polite"].tw-unseen');
+    expect(region?.textContent).toBe('');
+    for (let times = 0; times < 2; times++) {
+      announcer.announce('Stores');
+      expect(region?.textContent).toBe('');
+      jest.runAllTimers();
+      expect(region?.textContent).toBe('Stores');
+    }
+    jest.useRealTimers();
+  });
 });
