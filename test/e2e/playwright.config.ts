@@ -3,6 +3,8 @@ import { defineConfig } from '@playwright/test';
 import { run } from './support/run';
 import { phone, desktop } from './support/screens';
 
+const stories = { testMatch: 'story-*.spec.ts' };
+
 // The application is started by `npm run test:e2e`, which says where in a file. To run a test
 // against an `npm start` of your own:
 //     E2E_RUN_FILE=.data/run.json npx playwright test --config test/e2e/playwright.config.ts
@@ -39,9 +41,11 @@ export default defineConfig({
     },
   },
   projects: [
-    { name: 'phone-light', use: { ...phone, colorScheme: 'light' } },
-    { name: 'phone-dark', use: { ...phone, colorScheme: 'dark' } },
-    { name: 'desktop-light', use: { ...desktop, colorScheme: 'light' } },
-    { name: 'desktop-dark', use: { ...desktop, colorScheme: 'dark' } },
+    { name: 'phone-light', ...stories, use: { ...phone, colorScheme: 'light' } },
+    { name: 'phone-dark', ...stories, use: { ...phone, colorScheme: 'dark' } },
+    { name: 'desktop-light', ...stories, use: { ...desktop, colorScheme: 'light' } },
+    { name: 'desktop-dark', ...stories, use: { ...desktop, colorScheme: 'dark' } },
+    // What sets its own screen, or does not depend on one.
+    { name: 'once', testIgnore: stories.testMatch, use: { ...desktop, colorScheme: 'light' } },
   ],
 });

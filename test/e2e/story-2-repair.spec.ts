@@ -1,5 +1,5 @@
 import sharp from 'sharp';
-import { fitHinge } from './support/past-job';
+import { fitHinge } from './support/visits';
 import { expect, test, worksOffline } from './support/test';
 import { type Visitor } from './support/visitor';
 

@@ -11,21 +11,27 @@ interface Machine {
   energy: Energy;
 }
 
-/** A hinge that our tech fitted earlier today: what a later fault can follow from. */
-export async function fitHinge(works: Works, storeName: string, bay: string): Promise<void> {
+/** A visit of today for the shop's tech; returns its id. */
+export async function planVisit(works: Works, storeName: string, reason: string): Promise<string> {
   const office = await ShopApi.of(works.office);
   const tech = await ShopApi.of(works.tech);
   const stores = await office.get<{ items: { id: string }[] }>(
     `/api/stores?q=${encodeURIComponent(storeName)}`,
   );
-  const storeId = stores.items[0]?.id ?? '';
-  const visit = await office.post<{ id: string; plannedOn: string }>('/api/visits', {
-    storeId,
+  const visit = await office.post<{ id: string }>('/api/visits', {
+    storeId: stores.items[0]?.id,
     plannedOn: new Date().toLocaleDateString('en-CA', { timeZone: 'America/Chicago' }),
     techMembershipId: tech.membershipId,
-    reason: 'Door sits crooked',
+    reason,
   });
-  const sheet = await tech.get<{ machines: Machine[] }>(`/api/visits/${visit.id}/sheet`);
+  return visit.id;
+}
+
+/** A hinge that our tech fitted earlier today: what a later fault can follow from. */
+export async function fitHinge(works: Works, storeName: string, bay: string): Promise<void> {
+  const visitId = await planVisit(works, storeName, 'Door sits crooked');
+  const tech = await ShopApi.of(works.tech);
+  const sheet = await tech.get<{ machines: Machine[] }>(`/api/visits/${visitId}/sheet`);
   const machine = sheet.machines.find((each) => each.bay === bay);
   if (!machine) throw new Error(`${storeName} has no ${bay}.`);
   const cautions = cautionsFor(machine.kind, machine.energy).map(({ code }) => code);
@@ -46,7 +52,7 @@ export async function fitHinge(works: Works, storeName: string, bay: string): Pr
     return { id: uuid(), kind, at: new Date(start + at * 1000).toISOString(), payload };
   });
   const answer = await tech.post<{ results: { outcome: string; reason: string }[] }>(
-    `/api/visits/${visit.id}/acts`,
+    `/api/visits/${visitId}/acts`,
     { acts: sent },
   );
   const refused = answer.results.find(({ outcome }) => outcome !== 'stored');
