@@ -1,3 +1,3 @@
 import { run } from './bootstrap/run.mjs';
 
-await run('bench', { postgres: true });
+await run('bench', { postgres: true, chromium: process.argv[2] === 'lighthouse' });
