@@ -25,7 +25,8 @@ export default defineConfig({
     actionTimeout: 20_000,
     serviceWorkers: 'block',
     screenshot: 'only-on-failure',
-    trace: 'retain-on-failure',
+    // A picture and the structure of each page; for every step of it, add `--trace on`.
+    trace: 'off',
     contextOptions: { reducedMotion: 'reduce' },
     launchOptions: {
       executablePath: process.env.CHROME_PATH || '/usr/bin/chromium',
