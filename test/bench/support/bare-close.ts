@@ -1,7 +1,7 @@
 import PDFDocument from 'pdfkit';
 import pg from 'pg';
 import { v7 as uuid } from 'uuid';
-import { rubik } from '../../../server/src/core/documents/rubik';
+import { rubikFile } from '../../../server/src/core/documents/rubik';
 import { type BenchShop } from './bench-shop';
 
 interface Line {
@@ -104,7 +104,7 @@ async function closeStore(
 /** A tagged page with Rubik, a heading and the lines, straight from PDFKit, one after the other. */
 export async function barePdf(all: readonly Line[][]): Promise<number> {
   let bytes = 0;
-  const font = rubik('latin', 400);
+  const font = rubikFile('latin', 400);
   for (const lines of all) bytes += await onePdf(lines, font);
   return bytes;
 }

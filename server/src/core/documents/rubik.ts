@@ -1,20 +1,33 @@
 import { readFileSync } from 'node:fs';
+import { create, type Font } from 'fontkit';
 import { unpackWoff } from './woff';
 
 export type Weight = 400 | 600;
 export type Subset = 'latin' | 'latin-ext' | 'cyrillic' | 'cyrillic-ext';
 
-const unpacked = new Map<string, Buffer>();
+const parsed = new Map<string, Font>();
 
-/** A part of the Rubik typeface as TrueType; each is read and unpacked once a process. */
-export function rubik(subset: Subset, weight: Weight): Buffer {
-  const name = `rubik-${subset}-${weight}-normal.woff`;
-  let font = unpacked.get(name);
+/**
+ * A part of the Rubik typeface, ready for the PDF library. Reading a font costs as much as setting a
+ * page, so each is read once a process and shared by all its documents.
+ */
+export function rubik(subset: Subset, weight: Weight): Font {
+  const name = `${subset}-${weight}`;
+  let font = parsed.get(name);
   if (!font) {
-    font = unpackWoff(readFileSync(require.resolve(`@fontsource/rubik/files/${name}`)));
-    unpacked.set(name, font);
+    font = create(rubikFile(subset, weight)) as Font;
+    // A glyph remembers the first characters it was asked for, and a document says so to those who
+    // copy its text. Asked for all of them now, it does not depend on the documents before.
+    for (const codePoint of font.characterSet) font.glyphForCodePoint(codePoint);
+    parsed.set(name, font);
   }
   return font;
+}
+
+/** The same as a TrueType file. */
+export function rubikFile(subset: Subset, weight: Weight): Buffer {
+  const name = `rubik-${subset}-${weight}-normal.woff`;
+  return unpackWoff(readFileSync(require.resolve(`@fontsource/rubik/files/${name}`)));
 }
 
 // As the typeface's own style sheet divides it (`unicode-range`).

@@ -9,6 +9,13 @@ const options = {
   size: 'A4' as const,
 };
 
+/** A space, and one that may not break, are one glyph; the later asked for must not win. */
+function sheetSaying(text: string): Promise<Buffer> {
+  const sheet = new Sheet(options);
+  sheet.say('P', text);
+  return sheet.end(() => 'foot');
+}
+
 function sheetOf(rows: number): Promise<Buffer> {
   const sheet = new Sheet(options);
   sheet.say('H1', 'Łódź and Київ', { size: 20, weight: 600 });
@@ -27,6 +34,19 @@ function sheetOf(rows: number): Promise<Buffer> {
 describe('a sheet', () => {
   it('gives the same bytes for the same calls', async () => {
     expect((await sheetOf(5)).equals(await sheetOf(5))).toBe(true);
+  });
+
+  it('does not depend on the documents set before it', async () => {
+    const fresh = async () => {
+      jest.resetModules();
+      const { Sheet: Unread } = await import('./sheet');
+      const sheet = new Unread(options);
+      sheet.say('P', '1\u00a0234,50\u00a0EUR');
+      return sheet.end(() => 'foot');
+    };
+    const first = await fresh();
+    await sheetSaying('fi fl 1 234');
+    expect((await sheetSaying('1\u00a0234,50\u00a0EUR')).equals(first)).toBe(true);
   });
 
   it('goes on on further pages, with the head of the table again and nothing lost', async () => {

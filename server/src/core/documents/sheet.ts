@@ -49,6 +49,8 @@ export class Sheet {
     this.doc = new PDFDocument({
       size: options.size,
       margin: 0,
+      // None, instead of the library's own that nothing here is set in.
+      font: '',
       pdfVersion: '1.7',
       tagged: true,
       lang: options.lang,
@@ -174,7 +176,8 @@ export class Sheet {
     const weight = style.weight ?? 400;
     const name = `${run.subset}-${weight}`;
     if (!this.fonts.has(name)) {
-      this.doc.registerFont(name, rubik(run.subset, weight));
+      // The library takes a font that is read already; only its types do not say so yet.
+      this.doc.registerFont(name, rubik(run.subset, weight) as unknown as Buffer);
       this.fonts.add(name);
     }
     this.doc.font(name).fontSize(style.size ?? 9.5);
@@ -194,6 +197,7 @@ export class Sheet {
   }
 
   private wrapParagraph(text: string, cell: Cell): string[] {
+    if (this.widthOf(text, cell) <= cell.width) return [text];
     const lines: string[] = [];
     let line = '';
     let width = 0;
@@ -232,10 +236,11 @@ export class Sheet {
       const y = top + index * this.lineHeight(cell);
       let x = cell.x;
       if (cell.align === 'right') x += cell.width - this.widthOf(line, cell);
-      for (const run of runsOf(line)) {
+      const runs = runsOf(line);
+      for (const [at, run] of runs.entries()) {
         this.use(run, cell);
         this.doc.text(run.text, x, y, { lineBreak: false, ...figures(cell) });
-        x += this.doc.widthOfString(run.text, figures(cell));
+        if (at < runs.length - 1) x += this.doc.widthOfString(run.text, figures(cell));
       }
     });
   }

@@ -1,4 +1,4 @@
-import { rubik, runsOf } from './rubik';
+import { rubik, rubikFile, runsOf } from './rubik';
 import { unpackWoff } from './woff';
 
 /** Source: OpenType 1.9, "Calculating Checksums": the sum of a table's words, modulo 2 to the 32. */
@@ -12,7 +12,7 @@ describe('the typeface of documents', () => {
   it.each(['latin', 'latin-ext', 'cyrillic', 'cyrillic-ext'] as const)(
     'is unpacked whole (%s)',
     (subset) => {
-      const font = rubik(subset, 400);
+      const font = rubikFile(subset, 400);
       expect(font.readUInt32BE(0)).toBe(0x00010000);
       const tags: string[] = [];
       for (let n = 0; n < font.readUInt16BE(4); n += 1) {
