@@ -16,9 +16,6 @@ export function rubik(subset: Subset, weight: Weight): Font {
   let font = parsed.get(name);
   if (!font) {
     font = create(rubikFile(subset, weight)) as Font;
-    // A glyph remembers the first characters it was asked for, and a document says so to those who
-    // copy its text. Asked for all of them now, it does not depend on the documents before.
-    for (const codePoint of font.characterSet) font.glyphForCodePoint(codePoint);
     parsed.set(name, font);
   }
   return font;
