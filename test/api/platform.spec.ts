@@ -1,8 +1,10 @@
+import type Stripe from 'stripe';
 import { v7 as uuid } from 'uuid';
 import { type StripeFake, startStripeFake } from '../../infra/fakes/stripe/stripe-fake';
 import { platformRows } from '../../server/src/core/database/tenancy';
 import { addAdmin } from '../../server/src/features/platform/add-admin';
 import { queuePlatformMail } from '../../server/src/features/platform-mails/queue-platform-mail';
+import { workPlatformEvent } from '../../server/src/features/subscription/work-platform-event';
 import { api } from '../support/api';
 import { startTestServer, type TestServer } from '../support/app';
 import { Browser } from '../support/browser';
@@ -120,6 +122,38 @@ describe('the platform area', () => {
     expect(billed()?.pause_collection).toBeNull();
     await decide('platform.cancel');
     expect(billed()?.status).toBe('canceled');
+  });
+
+  it('keeps a shop paused until an admin resumes it, whatever is paid or chosen meanwhile', async () => {
+    const desk = api(server.app, owner.token);
+    const choose = () => desk.call('subscription.choose', { body: { planId: workshop } });
+    const chosen = await choose();
+    expect((await decide('platform.pause')).body).toMatchObject({ pausedByPlatform: true });
+    // The card page was open before the pause, and is paid after it.
+    await payOnCardPage(chosen.body.url as string);
+    expect((await desk.call('subscription.check')).body).toMatchObject({
+      state: 'paused',
+      pausedByPlatform: true,
+      mayWrite: false,
+    });
+    const paid = card.books.all('', 'event').filter((e) => e.type === 'invoice.paid');
+    expect(paid.length).toBeGreaterThan(0);
+    for (const event of paid) await workPlatformEvent(event as unknown as Stripe.Event);
+    expect((await write()).body.type).toBe('/problems/shop-paused');
+    expect((await choose()).body.type).toBe('/problems/conflict');
+    expect((await decide('platform.resume')).body).toMatchObject({
+      state: 'active',
+      pausedByPlatform: false,
+    });
+    expect((await write()).status).toBe(201);
+  });
+
+  it('resumes a shop on trial to its trial, not to a plan nobody pays', async () => {
+    await platformRows(`update subscriptions set state = 'trialing' where shop_id = $shop`, {
+      shop: shop.id,
+    });
+    await decide('platform.pause');
+    expect((await decide('platform.resume')).body.state).toBe('trialing');
   });
 
   it('puts a shop on another plan, also one that is not on offer', async () => {

@@ -23,6 +23,8 @@ export const platformShop = z.object({
 });
 
 export const platformShopPage = platformShop.extend({
+  /** Paused by an admin, not for want of payment. */
+  pausedByPlatform: z.boolean(),
   trialEndsAt: instant.nullable(),
   graceEndsAt: instant.nullable(),
   paidUntil: instant.nullable(),

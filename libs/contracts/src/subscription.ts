@@ -43,6 +43,8 @@ export const subscriptionEvent = z.object({
 export const subscription = z.object({
   state: subscriptionState,
   stateSince: instant,
+  /** Paused by a platform admin: paying does not open the shop, only an admin does. */
+  pausedByPlatform: z.boolean(),
   trialEndsAt: instant.nullable(),
   /** While past due: until when the shop may still write. */
   graceEndsAt: instant.nullable(),

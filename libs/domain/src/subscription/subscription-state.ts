@@ -4,8 +4,9 @@ import { type Instant, instantText, toInstant } from '../calendar/iso';
 export type SubscriptionState = 'trialing' | 'active' | 'past_due' | 'paused' | 'canceled';
 
 /**
- * What happens to a subscription. `grace_ended` comes from the sweep, `paused` and `resumed` from
- * a platform admin, `resubscribed` when a shop takes a plan again; payments from the processor.
+ * What happens to a subscription. `grace_ended` comes from the sweep, `paused`, `resumed` and `ended`
+ * from a platform admin, `resubscribed` when a shop takes a plan again; payments and `canceled` from
+ * the processor.
  */
 export type SubscriptionEvent =
   | 'trial_ended'
@@ -15,14 +16,16 @@ export type SubscriptionEvent =
   | 'paused'
   | 'resumed'
   | 'canceled'
+  | 'ended'
   | 'resubscribed';
 
 /**
  * Every state under every event, so that an event told twice, late or out of order has a defined
  * outcome: processors promise neither order nor single delivery.
  *
- * A paid bill opens a paused shop again, for that is what the owner pays for. Only taking a plan
- * again opens a canceled one: a late payment must not revive what somebody ended.
+ * A paid bill opens a shop that was paused for want of payment, for that is what the owner pays for;
+ * a platform admin's pause is `nextStanding`'s. Only taking a plan again opens a canceled one: a late
+ * payment must not revive what somebody ended.
  */
 const transitions: Record<SubscriptionState, Record<SubscriptionEvent, SubscriptionState>> = {
   trialing: {
@@ -33,6 +36,7 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
     paused: 'paused',
     resumed: 'trialing',
     canceled: 'canceled',
+    ended: 'canceled',
     resubscribed: 'active',
   },
   active: {
@@ -43,6 +47,7 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
     paused: 'paused',
     resumed: 'active',
     canceled: 'canceled',
+    ended: 'canceled',
     resubscribed: 'active',
   },
   past_due: {
@@ -53,6 +58,7 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
     paused: 'paused',
     resumed: 'past_due',
     canceled: 'canceled',
+    ended: 'canceled',
     resubscribed: 'active',
   },
   paused: {
@@ -63,6 +69,7 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
     paused: 'paused',
     resumed: 'active',
     canceled: 'canceled',
+    ended: 'canceled',
     resubscribed: 'active',
   },
   canceled: {
@@ -73,6 +80,7 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
     paused: 'canceled',
     resumed: 'canceled',
     canceled: 'canceled',
+    ended: 'canceled',
     resubscribed: 'active',
   },
 };
@@ -80,6 +88,27 @@ const transitions: Record<SubscriptionState, Record<SubscriptionEvent, Subscript
 /** The state after an event; the same state when the event changes nothing. */
 export function nextState(state: SubscriptionState, event: SubscriptionEvent): SubscriptionState {
   return transitions[state][event];
+}
+
+/** A subscription with, while a platform admin holds it paused, the state it would be in otherwise. */
+export interface Standing {
+  state: SubscriptionState;
+  heldFrom: SubscriptionState | null;
+}
+
+/**
+ * How a subscription stands after an event. What an admin paused only an admin opens: meanwhile
+ * payments, refusals and choices move the state behind the pause, to which the shop is resumed.
+ */
+export function nextStanding({ state, heldFrom }: Standing, event: SubscriptionEvent): Standing {
+  if (event === 'paused' && state !== 'canceled') {
+    return { state: 'paused', heldFrom: heldFrom ?? state };
+  }
+  const after = nextState(heldFrom ?? state, event);
+  const letGo = event === 'resumed' || event === 'ended';
+  return heldFrom === null || letGo
+    ? { state: after, heldFrom: null }
+    : { state: 'paused', heldFrom: after };
 }
 
 /**

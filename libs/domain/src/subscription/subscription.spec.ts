@@ -3,8 +3,10 @@ import { limitsNotice, mayAdd } from './plan-limits';
 import {
   type SubscriptionEvent,
   type SubscriptionState,
+  type Standing,
   graceEndsAt,
   mayWrite,
+  nextStanding,
   nextState,
 } from './subscription-state';
 
@@ -17,6 +19,7 @@ const events = [
   'paused',
   'resumed',
   'canceled',
+  'ended',
   'resubscribed',
 ] as const;
 
@@ -53,6 +56,43 @@ describe('a subscription', () => {
         expect(after(from, event, event)).toBe(after(from, event));
       }),
     );
+  });
+});
+
+describe('a shop a platform admin paused', () => {
+  const free = (state: SubscriptionState): Standing => ({ state, heldFrom: null });
+  const standing = (from: SubscriptionState, ...happened: SubscriptionEvent[]): Standing =>
+    happened.reduce(nextStanding, free(from));
+
+  it('stays paused whatever is paid, refused, chosen or ended at the card service', () => {
+    const states = fc.constantFrom('trialing', 'active', 'past_due', 'paused' as const);
+    const others = fc.constantFrom(...events.filter((e) => e !== 'resumed' && e !== 'ended'));
+    fc.assert(
+      fc.property(states, fc.array(others, { maxLength: 8 }), (from, happened) => {
+        expect(standing(from, 'paused', ...happened).state).toBe('paused');
+      }),
+    );
+  });
+
+  it('resumes to where it would be had nobody paused it', () => {
+    expect(standing('trialing', 'paused', 'resumed')).toEqual(free('trialing'));
+    expect(standing('past_due', 'paused', 'resumed')).toEqual(free('past_due'));
+    expect(standing('past_due', 'paused', 'payment_succeeded', 'resumed')).toEqual(free('active'));
+    expect(standing('active', 'paused', 'payment_failed', 'resumed')).toEqual(free('past_due'));
+    expect(standing('active', 'paused', 'canceled', 'resumed')).toEqual(free('canceled'));
+  });
+
+  it('was perhaps paused for want of payment before, and is opened by resuming it', () => {
+    const held = standing('past_due', 'grace_ended', 'paused');
+    expect(held).toEqual({ state: 'paused', heldFrom: 'paused' });
+    expect(nextStanding(held, 'payment_succeeded').state).toBe('paused');
+    expect(nextStanding(held, 'resumed')).toEqual(free('active'));
+    expect(standing('past_due', 'grace_ended', 'payment_succeeded')).toEqual(free('active'));
+  });
+
+  it('is let go when an admin ends the subscription', () => {
+    expect(standing('active', 'paused', 'ended')).toEqual(free('canceled'));
+    expect(standing('canceled', 'paused')).toEqual(free('canceled'));
   });
 });
 

@@ -3,9 +3,9 @@ import { type PlatformContext } from '../../core/context';
 import { platformRow, withPlatform } from '../../core/database/tenancy';
 import { type AnswerOf } from '../../core/http/route';
 import { stripe } from '../../core/payments/stripe';
-import { found, invalid, problem } from '../../core/problems/problem';
+import { invalid, problem } from '../../core/problems/problem';
 import { callCardService } from '../payments/card-calls';
-import { changeState } from '../subscription/change-state';
+import { type Change, changeState } from '../subscription/change-state';
 import { moveCardSubscription, putOnPlan, subscriptionOf } from '../subscription/choose-plan';
 import { planColumns, type PlanRow } from '../subscription/subscription-row';
 import { showShop } from './read-shops';
@@ -48,8 +48,8 @@ export async function pauseShop(
 ): Promise<ShopPage> {
   const { state } = await subscriptionOf(shopId);
   if (state === 'canceled') throw problem('conflict', 'The subscription of this shop has ended.');
-  await decide(context, shopId, 'paused', 'shop paused', note);
-  await stopBilling(shopId, true);
+  const { to } = await decide(context, shopId, 'paused', 'shop paused', note);
+  if (to === 'paused') await stopBilling(shopId, true);
   return showShop(context, shopId);
 }
 
@@ -62,8 +62,9 @@ export async function resumeShop(
   if (state === 'canceled') {
     throw problem('conflict', 'The subscription has ended: the shop chooses a plan to go on.');
   }
-  await decide(context, shopId, 'resumed', 'shop resumed', note);
-  await stopBilling(shopId, false);
+  const { to } = await decide(context, shopId, 'resumed', 'shop resumed', note);
+  // What ended behind the pause is billed no more, and cannot be changed there.
+  if (to !== 'canceled') await stopBilling(shopId, false);
   return showShop(context, shopId);
 }
 
@@ -72,7 +73,7 @@ export async function cancelShop(
   shopId: string,
   note: string,
 ): Promise<ShopPage> {
-  await decide(context, shopId, 'canceled', 'subscription ended', note);
+  await decide(context, shopId, 'ended', 'subscription ended', note);
   const { card_subscription: id } = await subscriptionOf(shopId);
   if (id) {
     await callCardService(async () => {
@@ -90,22 +91,13 @@ function decide(
   event: SubscriptionEvent,
   what: string,
   note: string,
-): Promise<void> {
+): Promise<Change> {
   return withPlatform(async () => {
-    const before = found(
-      await platformRow<{ state: string }>(
-        'select state from subscriptions where shop_id = $shopId for update',
-        { shopId },
-      ),
-    ).state;
-    const after = await changeState(shopId, {
-      event,
-      now: context.now,
-      note,
-      byUserId: context.userId,
-    });
-    if (after === before) return;
-    await recordPlatform(context, what, shopId, { from: before, to: after, note });
+    const by = { event, now: context.now, note, byUserId: context.userId };
+    const change = await changeState(shopId, by);
+    const { from, to, changed } = change;
+    if (changed) await recordPlatform(context, what, shopId, { from, to, note });
+    return change;
   });
 }
 

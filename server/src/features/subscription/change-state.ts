@@ -1,4 +1,9 @@
-import { nextState, type SubscriptionEvent, type SubscriptionState } from '@lib/domain';
+import {
+  nextStanding,
+  type Standing,
+  type SubscriptionEvent,
+  type SubscriptionState,
+} from '@lib/domain';
 import { v7 as uuid } from 'uuid';
 import { platformRow, platformRows, withPlatform } from '../../core/database/tenancy';
 import { found } from '../../core/problems/problem';
@@ -11,27 +16,44 @@ export interface Happened {
   byUserId?: string | null;
 }
 
+export interface Change {
+  from: SubscriptionState;
+  to: SubscriptionState;
+  /** Also when the state is the same, but a platform admin holds the shop now. */
+  changed: boolean;
+}
+
 /**
  * Takes a shop's subscription through what happened, writes it into its history, and tells the
  * owners when it changed anything for them. An event that changes nothing leaves no trace.
  */
-export function changeState(shopId: string, happened: Happened): Promise<SubscriptionState> {
+export function changeState(shopId: string, happened: Happened): Promise<Change> {
   return withPlatform(async () => {
     const before = found(
-      await platformRow<{ state: SubscriptionState }>(
-        'select state from subscriptions where shop_id = $shopId for update',
+      await platformRow<Standing>(
+        `select state, held_from as "heldFrom" from subscriptions
+         where shop_id = $shopId for update`,
         { shopId },
       ),
-    ).state;
-    const after = nextState(before, happened.event);
-    if (after === before) return before;
-    await platformRows(
-      'update subscriptions set state = $after, state_since = $now where shop_id = $shopId',
-      { shopId, after, now: happened.now },
     );
-    await noteEvent(shopId, { ...happened, from: before, to: after });
-    await tellOwners(shopId, after, `${happened.event}:${happened.now.toISOString()}`);
-    return after;
+    const after = nextStanding(before, happened.event);
+    const held = after.heldFrom !== null;
+    const moved = after.state !== before.state;
+    const changed = moved || after.heldFrom !== before.heldFrom;
+    const change = { from: before.state, to: after.state, changed };
+    if (!changed) return change;
+    await platformRows(
+      `update subscriptions set state = $state, held_from = $heldFrom,
+         state_since = case when state = $state then state_since else $now::timestamptz end
+       where shop_id = $shopId`,
+      { shopId, ...after, now: happened.now },
+    );
+    await noteEvent(shopId, { ...happened, ...change });
+    if (moved || held !== (before.heldFrom !== null)) {
+      const key = `${happened.event}:${happened.now.toISOString()}`;
+      await tellOwners(shopId, held ? 'held' : after.state, key);
+    }
+    return change;
   });
 }
 
@@ -64,7 +86,10 @@ export async function noteEvent(
   );
 }
 
-const told: Record<Exclude<SubscriptionState, 'trialing'>, string> = {
+type Told = SubscriptionState | 'held';
+
+const told: Record<Told, string> = {
+  trialing: 'The shop is open again and its trial goes on. Everything works.',
   active: 'The subscription is paid and active. Everything works.',
   past_due:
     'The subscription is not paid. The shop works on for some days; please choose a plan or see to ' +
@@ -72,13 +97,16 @@ const told: Record<Exclude<SubscriptionState, 'trialing'>, string> = {
   paused:
     'The shop is paused: everything can be read and exported, nothing can be written. Paying the ' +
     'subscription opens it again.',
+  held:
+    'The shop was paused by the platform: everything can be read and exported, nothing can be ' +
+    'written, and nothing is billed. Only the platform opens it again; please write to us.',
   canceled:
     'The subscription has ended. Everything can still be read and exported, and a plan can be chosen ' +
     'again at any time.',
 };
 
-async function tellOwners(shopId: string, state: SubscriptionState, key: string): Promise<void> {
-  if (state !== 'trialing') await mailOwners(shopId, told[state], key);
+function tellOwners(shopId: string, what: Told, key: string): Promise<void> {
+  return mailOwners(shopId, told[what], key);
 }
 
 /** One mail to each owner; the same key twice is one mail. */

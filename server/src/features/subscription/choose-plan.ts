@@ -30,6 +30,12 @@ export async function choosePlan(context: Context, planId: string): Promise<Answ
   );
   if (!plan) throw invalid([{ pointer: '/planId', in: 'body', detail: 'is not on offer' }]);
   const subscription = await subscriptionOf(context.shopId);
+  if (subscription.held_from !== null) {
+    throw problem(
+      'conflict',
+      'The platform paused this shop: a plan can be chosen once it resumes it.',
+    );
+  }
   const url = await pay(context, subscription, plan);
   await withTenant(context, () =>
     record(context, 'plan chosen', { kind: 'plan', id: plan.id }, { plan: plan.name }),

@@ -1,3 +1,4 @@
+import { type SubscriptionState } from '@lib/domain';
 import type Stripe from 'stripe';
 import { platformRow, platformRows, withPlatform } from '../../core/database/tenancy';
 import { stripe } from '../../core/payments/stripe';
@@ -12,7 +13,7 @@ const idShape = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/;
  * Brings a shop's subscription to what the card payment service says of it now. The object is read
  * again each time, so events may come late, twice and in any order.
  *
- * @param paid a bill was paid just now: that alone opens a paused shop
+ * @param paid a bill was paid just now: that alone opens a shop paused for want of payment
  */
 export async function followCardSubscription(id: string, now: Date, paid = false): Promise<void> {
   const subscription = await callCardService(() => stripe().subscriptions.retrieve(id));
@@ -72,6 +73,8 @@ async function link(
   return true;
 }
 
+const unpaid: SubscriptionState[] = ['past_due', 'trialing'];
+
 async function follow(
   ours: SubscriptionRow,
   subscription: Stripe.Subscription,
@@ -90,7 +93,7 @@ async function follow(
   switch (subscription.status) {
     case 'active':
     case 'trialing':
-      if (paid || ours.state === 'past_due' || ours.state === 'trialing') {
+      if (paid || unpaid.includes(ours.held_from ?? ours.state)) {
         await changeState(shopId, { event: 'payment_succeeded', now });
       }
       return;

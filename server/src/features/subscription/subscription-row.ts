@@ -13,6 +13,8 @@ export interface SubscriptionRow {
   shop_id: string;
   state: SubscriptionState;
   state_since: Date;
+  /** While a platform admin holds the shop paused: the state behind the pause. */
+  held_from: SubscriptionState | null;
   trial_ends_at: Date | null;
   current_period_ends_at: Date | null;
   card_customer: string | null;
@@ -21,7 +23,7 @@ export interface SubscriptionRow {
   version: number;
 }
 
-export const subscriptionColumns = `b.shop_id, b.state, b.state_since, b.trial_ends_at,
+export const subscriptionColumns = `b.shop_id, b.state, b.state_since, b.held_from, b.trial_ends_at,
   b.current_period_ends_at, b.card_customer, b.card_subscription, b.card_checkout, b.version`;
 
 export interface PlanRow {
@@ -106,6 +108,7 @@ export function presentStanding(subscription: SubscriptionRow, plan: PlanRow, no
   return {
     state,
     stateSince: state_since.toISOString(),
+    pausedByPlatform: subscription.held_from !== null,
     trialEndsAt: instantOrNull(subscription.trial_ends_at),
     graceEndsAt: state === 'past_due' ? graceEndsAt(state_since, plan.grace_days) : null,
     paidUntil: instantOrNull(subscription.current_period_ends_at),

@@ -34,6 +34,7 @@ function shop(facts: Partial<Shop>): Shop {
     machines: 180,
     crew: 7,
     createdAt: '2031-01-01T10:00:00Z',
+    pausedByPlatform: false,
     trialEndsAt: null,
     graceEndsAt: null,
     paidUntil: null,

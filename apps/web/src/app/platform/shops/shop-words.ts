@@ -36,6 +36,7 @@ const happened: Record<string, string> = {
   paused: 'Paused by the platform',
   resumed: 'Resumed by the platform',
   canceled: 'Ended',
+  ended: 'Ended by the platform',
   resubscribed: 'A plan was taken again',
   plan_changed: 'Put on another plan',
 };

@@ -54,7 +54,7 @@ import { type Plan, type Subscription, SubscriptionApi } from './subscription-ap
               <td class="tw-acts">
                 @if (plan.id === subscription().plan.id && settled()) {
                   <span class="tw-soft">your plan</span>
-                } @else if (mayChoose()) {
+                } @else if (mayChoose() && !subscription().pausedByPlatform) {
                   <button
                     matButton="outlined"
                     type="button"

@@ -1,7 +1,7 @@
 import { eventWords, standingWords } from './standing-words';
 
 const day = (instant: string) => instant.slice(0, 10);
-const standing = { trialEndsAt: null, graceEndsAt: null, paidUntil: null };
+const standing = { pausedByPlatform: false, trialEndsAt: null, graceEndsAt: null, paidUntil: null };
 
 describe('standingWords', () => {
   it('says until when it is tried, paid, or tolerated', () => {
@@ -11,6 +11,13 @@ describe('standingWords', () => {
     expect(standingWords(paid, day)).toEqual({ words: 'Paid until 2031-06-06.', tone: 'plain' });
     const late = { ...standing, state: 'past_due', graceEndsAt: '2031-05-14T00:00:00Z' } as const;
     expect(standingWords(late, day).words).toContain('Everything works until 2031-05-14');
+  });
+
+  it('does not promise that paying opens what the platform paused', () => {
+    const held = { ...standing, state: 'paused', pausedByPlatform: true } as const;
+    const { words } = standingWords(held, day);
+    expect(words).toContain('Only the platform opens it again');
+    expect(words).not.toContain('paying');
   });
 
   it('says that a paused or ended shop loses nothing, and what opens it', () => {

@@ -1,6 +1,9 @@
 import { type Subscription, type SubscriptionEvent } from './subscription-api';
 
-type Standing = Pick<Subscription, 'state' | 'trialEndsAt' | 'graceEndsAt' | 'paidUntil'>;
+type Standing = Pick<
+  Subscription,
+  'state' | 'pausedByPlatform' | 'trialEndsAt' | 'graceEndsAt' | 'paidUntil'
+>;
 
 export interface Told {
   readonly words: string;
@@ -9,7 +12,7 @@ export interface Told {
 
 /** How the subscription stands and what that means for the shop's work. */
 export function standingWords(standing: Standing, day: (instant: string) => string): Told {
-  const { state, trialEndsAt, graceEndsAt, paidUntil } = standing;
+  const { state, pausedByPlatform, trialEndsAt, graceEndsAt, paidUntil } = standing;
   switch (state) {
     case 'trialing':
       return {
@@ -33,9 +36,11 @@ export function standingWords(standing: Standing, day: (instant: string) => stri
       };
     case 'paused':
       return {
-        words:
-          'The shop is paused: everything can be read and exported, nothing changed. Choosing a ' +
-          'plan and paying opens it again.',
+        words: pausedByPlatform
+          ? 'The platform paused the shop: everything can be read and exported, nothing changed, ' +
+            'and nothing is billed. Only the platform opens it again; write to its support.'
+          : 'The shop is paused: everything can be read and exported, nothing changed. Choosing a ' +
+            'plan and paying opens it again.',
         tone: 'alarm',
       };
     case 'canceled':
@@ -56,6 +61,7 @@ const events: Record<string, string> = {
   paused: 'Paused by the platform',
   resumed: 'Resumed by the platform',
   canceled: 'Ended',
+  ended: 'Ended by the platform',
   resubscribed: 'A plan was taken again',
   plan_changed: 'The plan changed',
 };

@@ -23,6 +23,7 @@ const plan = {
 const subscription = {
   state: 'past_due',
   stateSince: '2031-05-01T00:00:00Z',
+  pausedByPlatform: false,
   trialEndsAt: null,
   graceEndsAt: '2031-05-15T10:00:00Z',
   paidUntil: null,

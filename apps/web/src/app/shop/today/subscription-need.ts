@@ -10,7 +10,9 @@ export const subscription: Judge = ({ subscription }, { locale, today }) => {
   const state = subscription?.state;
   if (state === 'paused' || state === 'canceled') {
     const words = state === 'paused' ? 'The shop is paused' : 'The subscription has ended';
-    const detail = 'Everything can be read and exported. Choose a plan to write again.';
+    const detail = subscription?.pausedByPlatform
+      ? 'Everything can be read and exported. Only the platform opens it again.'
+      : 'Everything can be read and exported. Choose a plan to write again.';
     return { ...toSubscription, id: 'paused', words, detail, pressing: true };
   }
   if (state === 'past_due') {
