@@ -17,14 +17,28 @@ const channel = 'tumblewright_live';
 const changes = new EventEmitter().setMaxListeners(0);
 
 /** Tells everyone who follows the shop, when the open transaction commits. */
-export async function announce(
+export function announce(
   context: Pick<Context, 'shopId'>,
   kind: string,
   id: string | null,
   clientId: string | null = null,
 ): Promise<void> {
-  const event: LiveEvent = { shopId: context.shopId, clientId, kind, id };
-  await write('select pg_notify($channel, $event)', { channel, event: JSON.stringify(event) });
+  return announceAll(context, kind, [{ id, clientId }]);
+}
+
+/** The same of many things of a kind, with one statement. */
+export async function announceAll(
+  context: Pick<Context, 'shopId'>,
+  kind: string,
+  changed: readonly Pick<LiveEvent, 'id' | 'clientId'>[],
+): Promise<void> {
+  const events = changed.map(({ id, clientId }): string =>
+    JSON.stringify({ shopId: context.shopId, clientId, kind, id } satisfies LiveEvent),
+  );
+  await write('select pg_notify($channel, event) from unnest($events::text[]) as e (event)', {
+    channel,
+    events,
+  });
 }
 
 /** Listens on a connection of its own, and connects again when it breaks. */

@@ -1,7 +1,7 @@
 import { setTimeout as wait } from 'node:timers/promises';
 import { type Config } from '../../core/config';
 import { type Context, systemContext } from '../../core/context';
-import { row, rows, withTenant, write } from '../../core/database/tenancy';
+import { rows, withTenant, write } from '../../core/database/tenancy';
 import { files } from '../../core/files/file-store';
 import { metrics } from '../../core/http/metrics';
 import { enqueue } from '../../core/jobs/boss';
@@ -17,11 +17,13 @@ import { statementLetter } from './statement-letter';
 /** Conversations with the mail server at once, of one shop's job. */
 const lanes = 3;
 /** Mails after which the page of a month close is told how far it is. */
-const tellEvery = 10;
+const tellEvery = 20;
+/** Due mails looked up at once. */
+const ahead = 30;
 
-interface Claimed {
+/** A mail that was due when it was looked up; whose it is to hand over, `claim` decides. */
+interface DueMail {
   id: string;
-  attempt: number;
   recipient: string;
   recipientName: string;
   subject: string;
@@ -31,6 +33,10 @@ interface Claimed {
   snapshot: StoredSnapshot;
   fileName: string | null;
   sha256: string | null;
+}
+
+interface Claimed extends DueMail {
+  attempt: number;
 }
 
 export const sendDeliveriesJob: Job = {
@@ -44,15 +50,16 @@ export const sendDeliveriesJob: Job = {
 export async function sendDeliveries(context: Context, config: Config): Promise<void> {
   const shop = await withTenant(context, () => shopFacts(context));
   const runs = new Set<string>();
+  const line: DueMail[] = [];
   const lane = async () => {
     const session = mailSession(config.mail);
     try {
       let sent = 0;
-      let next = await withTenant(context, () => claim(context));
+      let next = await withTenant(context, () => claimNext(context, line));
       while (next) {
         const { runId } = next;
         runs.add(runId);
-        next = await workOne(context, shop, config, session, next);
+        next = await workOne(context, shop, config, session, next, line);
         sent += 1;
         if (sent % tellEvery === 0) await moveRun(context, runId, []);
       }
@@ -73,6 +80,7 @@ async function workOne(
   config: Config,
   session: MailSession,
   claimed: Claimed,
+  line: DueMail[],
 ): Promise<Claimed | undefined> {
   const settled = settle(
     await handOver(context, shop, config, session, claimed),
@@ -83,7 +91,7 @@ async function workOne(
   return persistently(() =>
     withTenant(context, async () => {
       await writeSettled(context, claimed, settled);
-      return claim(context);
+      return claimNext(context, line);
     }),
   );
 }
@@ -103,33 +111,46 @@ async function persistently<T>(work: () => Promise<T>): Promise<T> {
   return work();
 }
 
-/** Takes one due mail for this attempt; committed before anything is said to the mail server. */
-async function claim(context: Context): Promise<Claimed | undefined> {
-  const [taken] = await write<{ id: string; attempt: number }>(
-    `update deliveries d
-     set state = 'handing_over', attempt = d.attempt + 1,
-       lease_until = now() + make_interval(secs => $leaseSeconds)
-     where d.shop_id = $shopId and d.id = (
-       select w.id from deliveries w
-       join statements s on s.shop_id = w.shop_id and s.id = w.statement_id
-       join statement_runs r on r.shop_id = s.shop_id and r.id = s.run_id and r.state <> 'held'
-       where w.shop_id = $shopId and w.state = 'waiting' and w.next_attempt_at <= now()
-       order by w.next_attempt_at, w.id limit 1
-       for update of w skip locked)
-     returning d.id, d.attempt`,
-    { shopId: context.shopId, leaseSeconds },
-  );
-  if (!taken) return undefined;
-  return row<Claimed>(
-    `select d.id, d.attempt, d.recipient, d.recipient_name as "recipientName", d.subject,
+/** The next mail of the line that is still to be had; the line is filled anew when it is empty. */
+async function claimNext(context: Context, line: DueMail[]): Promise<Claimed | undefined> {
+  for (;;) {
+    if (line.length === 0) line.push(...(await dueMails(context)));
+    const mail = line.shift();
+    if (!mail) return undefined;
+    const attempt = await claim(context, mail);
+    if (attempt !== undefined) return { ...mail, attempt };
+  }
+}
+
+function dueMails(context: Context): Promise<DueMail[]> {
+  return rows<DueMail>(
+    `select d.id, d.recipient, d.recipient_name as "recipientName", d.subject,
        d.message_id as "messageId", s.id as "statementId", s.run_id as "runId", s.snapshot,
        a.name as "fileName", a.sha256
      from deliveries d
      join statements s on s.shop_id = d.shop_id and s.id = d.statement_id
+     join statement_runs r on r.shop_id = s.shop_id and r.id = s.run_id and r.state <> 'held'
      left join attachments a on a.shop_id = s.shop_id and a.owner_kind = 'statement' and a.owner_id = s.id
-     where d.shop_id = $shopId and d.id = $id`,
-    { shopId: context.shopId, id: taken.id },
+     where d.shop_id = $shopId and d.state = 'waiting' and d.next_attempt_at <= now()
+     order by d.next_attempt_at, d.id limit ${ahead}`,
+    { shopId: context.shopId },
   );
+}
+
+/** Takes a mail for this attempt; committed before anything is said to the mail server. */
+async function claim(context: Context, mail: DueMail): Promise<number | undefined> {
+  const [taken] = await write<{ attempt: number }>(
+    `update deliveries d
+     set state = 'handing_over', attempt = d.attempt + 1,
+       lease_until = now() + make_interval(secs => $leaseSeconds)
+     where d.shop_id = $shopId and d.id = $id and d.state = 'waiting'
+       and d.next_attempt_at <= now()
+       and exists (select 1 from statement_runs r
+         where r.shop_id = $shopId and r.id = $runId and r.state <> 'held')
+     returning d.attempt`,
+    { shopId: context.shopId, id: mail.id, runId: mail.runId, leaseSeconds },
+  );
+  return taken?.attempt;
 }
 
 async function handOver(

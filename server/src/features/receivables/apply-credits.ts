@@ -3,19 +3,32 @@ import { type Context } from '../../core/context';
 import { write } from '../../core/database/tenancy';
 import { unusedCredits } from './open-statements';
 
-/** Uses what a store paid ahead for a new statement, the oldest payment first. */
+/** A new statement, and what is to be paid of it. */
+interface NewStatement {
+  id: string;
+  storeId: string;
+  clientId: string;
+  open: number;
+}
+
+/** Uses what stores paid ahead for their new statements, the oldest payment first. */
 export async function applyCredits(
   context: Pick<Context, 'shopId'>,
-  statement: { id: string; storeId: string; clientId: string; open: number },
+  statements: readonly NewStatement[],
 ): Promise<void> {
-  let open = statement.open;
-  if (open <= 0) return;
-  for (const { paymentId, credit } of await unusedCredits(context, statement.storeId)) {
-    const amount = Math.min(open, credit);
-    if (amount <= 0) return;
-    const { id: statementId, clientId } = statement;
-    await allocate(context, { clientId, paymentId, statementId, amount });
-    open -= amount;
+  const owing = statements.filter(({ open }) => open > 0);
+  const credits = await unusedCredits(
+    context,
+    owing.map(({ storeId }) => storeId),
+  );
+  for (const { id: statementId, storeId, clientId, ...owed } of owing) {
+    let { open } = owed;
+    for (const { paymentId, credit } of credits.filter((each) => each.storeId === storeId)) {
+      const amount = Math.min(open, credit);
+      if (amount <= 0) break;
+      await allocate(context, { clientId, paymentId, statementId, amount });
+      open -= amount;
+    }
   }
 }
 

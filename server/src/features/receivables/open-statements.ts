@@ -44,17 +44,18 @@ export async function storeBalance(
 
 /** A payment of which something is left over for statements to come. */
 export interface UnusedCredit {
+  storeId: string;
   paymentId: string;
   credit: number;
 }
 
-/** Payments of a store that paid ahead, oldest first. */
+/** Payments of some stores that paid ahead, oldest first. */
 export function unusedCredits(
   context: Pick<Context, 'shopId'>,
-  storeId: string,
+  storeIds: readonly string[],
 ): Promise<UnusedCredit[]> {
   return rows<UnusedCredit>(
-    `select p.id as "paymentId", p.amount - r.given_back - a.used as credit
+    `select p.store_id as "storeId", p.id as "paymentId", p.amount - r.given_back - a.used as credit
      from payments p
      cross join lateral (
        select coalesce(sum(amount), 0)::bigint as given_back from refunds
@@ -64,9 +65,9 @@ export function unusedCredits(
        select coalesce(sum(amount), 0)::bigint as used from allocations
        where shop_id = p.shop_id and payment_id = p.id
      ) a
-     where p.shop_id = $shopId and p.store_id = $storeId and p.state = 'succeeded'
+     where p.shop_id = $shopId and p.store_id = any ($storeIds::uuid[]) and p.state = 'succeeded'
        and p.amount - r.given_back - a.used > 0
      order by p.received_on, p.id`,
-    { shopId: context.shopId, storeId },
+    { shopId: context.shopId, storeIds },
   );
 }

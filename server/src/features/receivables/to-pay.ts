@@ -27,7 +27,7 @@ export async function toPayInAll(
 }
 
 async function credit(context: Pick<Context, 'shopId'>, storeId: string): Promise<number> {
-  const credits = await unusedCredits(context, storeId);
+  const credits = await unusedCredits(context, [storeId]);
   return credits.reduce((sum, each) => sum + each.credit, 0);
 }
 

@@ -1,20 +1,19 @@
 import { tradeDayOf } from '@lib/domain';
 import { systemContext, type Context } from '../../core/context';
 import { databaseIsAway } from '../../core/database/away';
-import { row, rows, withTenant, write } from '../../core/database/tenancy';
+import { row, rows, withTenant } from '../../core/database/tenancy';
 import { type Job } from '../../core/jobs/work';
 import { type Log } from '../../core/logging';
 import { type ShopFacts, shopFacts } from '../../core/shop-facts';
-import { type RunFacts, buildStatementOfStore } from './build-statement-of-store';
 import { monthsToState } from './fees-due';
 import { moveRun } from './move-run';
+import { noteFailures } from './note-failures';
+import { type RunFacts, stateStores } from './state-stores';
 
 /** Stores of one job; what is left after them is the next job's. */
 const chunk = 200;
-/** Statements after which rendering may begin, and the page is told how far it is. */
-const batch = 20;
-/** Tries before a store's statement is given up and shown. */
-const mostTries = 3;
+/** Stores of one transaction: enough to share its cost, few enough to hold nobody up. */
+const batch = 40;
 
 export interface RunJob {
   shopId: string;
@@ -30,18 +29,16 @@ export const buildStatementsJob: Job = {
 };
 
 /**
- * Builds the next statements of a run, each in a transaction of its own.
+ * Builds the next statements of a run, a batch of stores in a transaction.
  *
  * @returns whether there were any to build
  */
 export async function buildStatements(context: Context, runId: string, log: Log): Promise<boolean> {
   const work = await withTenant(context, () => openRun(context, runId));
   if (!work) return false;
-  let built = 0;
-  for (const storeId of work.storeIds) {
-    if (!(await buildOne(context, work.shop, work.run, storeId, log))) continue;
-    built += 1;
-    if (built % batch === 0) await moveRun(context, runId, ['render']);
+  for (let at = 0; at < work.storeIds.length; at += batch) {
+    await buildBatch(context, work.shop, work.run, work.storeIds.slice(at, at + batch), log);
+    await moveRun(context, runId, ['render']);
   }
   await moveRun(context, runId, ['build', 'render']);
   return work.storeIds.length > 0;
@@ -79,45 +76,30 @@ async function openRun(
   };
 }
 
-async function buildOne(
+/** One store's trouble must not keep the others from their statements: then each is tried alone. */
+async function buildBatch(
   context: Context,
   shop: ShopFacts,
   run: RunFacts,
-  storeId: string,
+  storeIds: readonly string[],
   log: Log,
-): Promise<boolean> {
+): Promise<void> {
   try {
-    return (await buildStatementOfStore(context, shop, run, storeId)) !== undefined;
+    const failed = await stateStores(context, shop, run, storeIds);
+    for (const { storeId, error } of failed) logFailure(log, storeId, error);
   } catch (error) {
     // Without a database nothing can be written down either: the whole job is tried again.
     if (databaseIsAway(error)) throw error;
-    log.error({ err: error, storeId }, 'a statement could not be built');
-    await noteFailure(context, run.id, storeId, error);
-    return false;
+    const [storeId, ...others] = storeIds;
+    if (storeId === undefined || others.length > 0) {
+      for (const each of storeIds) await buildBatch(context, shop, run, [each], log);
+      return;
+    }
+    logFailure(log, storeId, error);
+    await withTenant(context, () => noteFailures(context, run.id, [{ storeId, error }]));
   }
 }
 
-/** One store's trouble must not keep the others from their statements. */
-async function noteFailure(
-  context: Context,
-  runId: string,
-  storeId: string,
-  error: unknown,
-): Promise<void> {
-  // Figures that do not add up will not by trying again.
-  const forGood = error instanceof RangeError;
-  await withTenant(context, () =>
-    write(
-      `update statement_run_stores set attempt = attempt + 1, last_error = $words,
-         state = case when $forGood or attempt + 1 >= ${mostTries} then 'failed' else state end
-       where shop_id = $shopId and run_id = $runId and store_id = $storeId and state = 'waiting'`,
-      {
-        shopId: context.shopId,
-        runId,
-        storeId,
-        forGood,
-        words: (error instanceof Error ? error.message : String(error)).slice(0, 300),
-      },
-    ),
-  );
+function logFailure(log: Log, storeId: string, error: unknown): void {
+  log.error({ err: error, storeId }, 'a statement could not be built');
 }

@@ -22,7 +22,7 @@ export function mailStatement(
     );
     if (!statement.ready)
       throw problem('conflict', 'The PDF is being made: try again in a minute.');
-    const added = await queueStatementMails(context, statementId, config().mail.from);
+    const added = await queueStatementMails(context, [statementId], config().mail.from);
     if (added > 0) await enqueue('deliveries-send', { shopId: context.shopId });
     return { added };
   });

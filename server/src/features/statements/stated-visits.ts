@@ -69,12 +69,24 @@ export async function statedVisits(
      order by position`,
     bind,
   );
-  return tickets.map((ticket) => statedVisit(ticket, jobs, lines));
+  const jobsOf = byTicket(jobs);
+  const linesOf = byTicket(lines);
+  return tickets.map((ticket) =>
+    statedVisit(ticket, jobsOf.get(ticket.id) ?? [], linesOf.get(ticket.id) ?? []),
+  );
 }
 
-function statedVisit(ticket: TicketFacts, jobs: JobRow[], lines: LineRow[]): StatedVisit {
-  const ofVisit = jobs.filter((job) => job.ticketId === ticket.id);
-  const ofTicket = lines.filter((line) => line.ticketId === ticket.id);
+function byTicket<Row extends { ticketId: string }>(all: readonly Row[]): Map<string, Row[]> {
+  const found = new Map<string, Row[]>();
+  for (const each of all) {
+    const others = found.get(each.ticketId);
+    if (others) others.push(each);
+    else found.set(each.ticketId, [each]);
+  }
+  return found;
+}
+
+function statedVisit(ticket: TicketFacts, ofVisit: JobRow[], ofTicket: LineRow[]): StatedVisit {
   return {
     ticketId: ticket.id,
     ticketNumber: ticket.number,
