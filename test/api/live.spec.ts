@@ -107,6 +107,22 @@ describe('what changes in the shop', () => {
     expect(heard.heard().split(clientId)).toHaveLength(2);
   });
 
+  it('includes invitations: sent, mailed again, taken back', async () => {
+    const owner = await buildPerson(shop, 'shop_owner');
+    const heard = await follow(owner);
+    await until(() => heard.heard().includes('following'));
+    const desk = api(server.app, owner.token);
+    const body = { email: 'new-tech@people.example', name: 'Nia New', role: 'tech' };
+    const { id } = (await desk.call('invitations.send', { body })).body as { id: string };
+    const times = () => heard.heard().split(`"kind":"invitations","id":"${id}"`).length - 1;
+    await until(() => times() === 1);
+    const params = { invitationId: id };
+    expect((await desk.call('invitations.resend', { params })).status).toBe(200);
+    await until(() => times() === 2);
+    expect((await desk.call('invitations.withdraw', { params })).status).toBe(200);
+    await until(() => times() === 3);
+  });
+
   it('is for people who are signed in', async () => {
     expect((await api(server.app).call('live.follow')).status).toBe(401);
   });

@@ -73,6 +73,30 @@ export const partSource = z.enum(['shelf', 'van', 'storeroom', 'ordered', 'salva
 export const subscriptionState = z.enum(['trialing', 'active', 'past_due', 'paused', 'canceled']);
 export const deliveryState = z.enum(['waiting', 'handing_over', 'sent', 'failed', 'uncertain']);
 export const runState = z.enum(['building', 'sending', 'done', 'held', 'failed']);
+/** What a live update says has changed; the browser asks again for what it shows of it. */
+export const liveKind = z.enum([
+  'call',
+  'clients',
+  'conditions',
+  'contacts',
+  'contract',
+  'crew',
+  'delivery',
+  'files',
+  'imports',
+  'invitations',
+  'machines',
+  'parts',
+  'payment',
+  'prices',
+  'ruling',
+  'shop',
+  'statement',
+  'statement-run',
+  'stores',
+  'ticket',
+  'visit',
+]);
 export const conditionKind = z.enum(['access', 'supply', 'hazard']);
 
 export type MachineKind = z.infer<typeof machineKind>;
@@ -88,6 +112,7 @@ export type FindingCode = z.infer<typeof findingCode>;
 export type LineKind = z.infer<typeof lineKind>;
 export type WarrantyMark = z.infer<typeof warrantyMark>;
 export type PartSource = z.infer<typeof partSource>;
+export type LiveKind = z.infer<typeof liveKind>;
 export type SubscriptionState = z.infer<typeof subscriptionState>;
 export type DeliveryState = z.infer<typeof deliveryState>;
 export type RunState = z.infer<typeof runState>;

@@ -1,4 +1,5 @@
 import { EventEmitter } from 'node:events';
+import { type LiveKind } from '@lib/contracts';
 import pg from 'pg';
 import { type Response } from 'express';
 import { type Context } from '../context';
@@ -9,7 +10,7 @@ import { type Log } from '../logging';
 export interface LiveEvent {
   shopId: string;
   clientId: string | null;
-  kind: string;
+  kind: LiveKind;
   id: string | null;
 }
 
@@ -19,7 +20,7 @@ const changes = new EventEmitter().setMaxListeners(0);
 /** Tells everyone who follows the shop, when the open transaction commits. */
 export function announce(
   context: Pick<Context, 'shopId'>,
-  kind: string,
+  kind: LiveKind,
   id: string | null,
   clientId: string | null = null,
 ): Promise<void> {
@@ -29,7 +30,7 @@ export function announce(
 /** The same of many things of a kind, with one statement. */
 export async function announceAll(
   context: Pick<Context, 'shopId'>,
-  kind: string,
+  kind: LiveKind,
   changed: readonly Pick<LiveEvent, 'id' | 'clientId'>[],
 ): Promise<void> {
   const events = changed.map(({ id, clientId }): string =>

@@ -176,6 +176,7 @@ function join(shop: Context, invitation: Found): Promise<string> {
     const subject = { kind: 'membership', id };
     await record(shop, 'invitation accepted', subject, { role: invitation.role });
     await announce(shop, 'crew', id);
+    await announce(shop, 'invitations', invitation.id);
     return id;
   });
 }

@@ -5,6 +5,7 @@ import { mailedToken, tokenHash } from '../../core/auth/mailed-token';
 import { type Context } from '../../core/context';
 import { row, withTenant, write } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
+import { announce } from '../../core/live/live';
 import { found, invalid, problem } from '../../core/problems/problem';
 import { queuePlatformMail } from '../platform-mails/queue-platform-mail';
 import { refusePastLimit } from '../subscription/plan-limits';
@@ -85,6 +86,7 @@ export function withdrawInvitation(context: Context, invitationId: string): Prom
     );
     const subject = { kind: 'invitation', id: invitationId };
     await record(context, 'invitation withdrawn', subject, { role: open.role });
+    await announce(context, 'invitations', invitationId);
     return presentInvitation(found(withdrawn), context.now);
   });
 }
@@ -172,5 +174,6 @@ async function mailed(context: Context, invited: InvitationRow, what: string): P
   });
   const subject = { kind: 'invitation', id: invited.id };
   await record(context, what, subject, { role: invited.role });
+  await announce(context, 'invitations', invited.id);
   return presentInvitation(invited, context.now);
 }

@@ -260,7 +260,7 @@ async function leaveMachines(
      returning m.id`,
     { shopId: of.shopId, left: JSON.stringify(left) },
   );
-  for (const { id } of changed) await announce(context, 'machine', id, of.clientId);
+  for (const { id } of changed) await announce(context, 'machines', id, of.clientId);
 }
 
 async function writeVisit(

@@ -85,7 +85,7 @@ export class StoreFloor {
   protected readonly tally = computed(() => earningOf([this.store()]));
 
   constructor() {
-    reloadOn(this.floor, 'stores', 'machine', 'machines', 'call');
+    reloadOn(this.floor, 'stores', 'machines', 'call');
   }
 
   protected openMachine(machineId: string): void {

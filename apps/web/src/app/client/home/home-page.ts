@@ -90,6 +90,6 @@ export class HomePage {
   );
 
   constructor() {
-    reloadOn(this.facts, 'stores', 'machine', 'machines', 'visit', 'call', 'payment', 'statement');
+    reloadOn(this.facts, 'stores', 'machines', 'visit', 'call', 'payment', 'statement');
   }
 }

@@ -107,7 +107,7 @@ export class MachinePage {
   });
 
   constructor() {
-    reloadOn(this.machine, 'machine', 'machines', 'conditions');
+    reloadOn(this.machine, 'machines', 'conditions');
     reloadOn(this.history, 'visit', 'files');
     reloadOn(this.#calls, 'call', 'visit');
     effect(() => {

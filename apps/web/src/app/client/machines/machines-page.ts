@@ -53,6 +53,6 @@ export class MachinesPage {
   });
 
   constructor() {
-    reloadOn(this.stores, 'stores', 'machine', 'machines');
+    reloadOn(this.stores, 'stores', 'machines');
   }
 }

@@ -1,11 +1,12 @@
 import { inject, Injectable } from '@angular/core';
+import { type LiveKind } from '@lib/contracts/web';
 import { filter, Observable, share, type Subscriber } from 'rxjs';
 import { Session } from '../session/session';
 import { EventReader } from './sse';
 
 export interface LiveEvent {
-  /** What changed, `visit`, `call`, `statement` ... */
-  readonly kind: string;
+  /** What changed; `missed`: perhaps anything. */
+  readonly kind: LiveKind | 'missed';
   readonly id: string | null;
 }
 
@@ -28,8 +29,10 @@ export class Live {
   }).pipe(share());
 
   /** Changes of these kinds, and interruptions, after which everything should be asked again. */
-  of(...kinds: readonly string[]): Observable<LiveEvent> {
-    return this.events.pipe(filter(({ kind }) => kind === missed.kind || kinds.includes(kind)));
+  of(...kinds: readonly LiveKind[]): Observable<LiveEvent> {
+    return this.events.pipe(
+      filter(({ kind }) => kind === missed.kind || kinds.some((each) => each === kind)),
+    );
   }
 
   async #follow(to: Subscriber<LiveEvent>, stop: AbortSignal): Promise<void> {

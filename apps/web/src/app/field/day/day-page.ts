@@ -82,7 +82,7 @@ export class DayPage {
     });
     void inject(PartBook).takeAlong();
     inject(Live)
-      .of('visit', 'visits')
+      .of('visit')
       .pipe(auditTime(1_000), takeUntilDestroyed())
       .subscribe(() => void this.load());
   }

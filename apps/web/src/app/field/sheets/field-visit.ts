@@ -34,7 +34,7 @@ export class FieldVisit {
   constructor() {
     // What others change meanwhile, and what the server made of what was sent from here.
     inject(Live)
-      .of('visit', 'visits', 'call', 'calls', 'conditions')
+      .of('visit', 'call', 'conditions')
       .pipe(auditTime(1_000), takeUntilDestroyed())
       .subscribe(() => void this.reload());
   }

@@ -79,6 +79,6 @@ export class ClientList {
 
   constructor() {
     keepInAddress(this.clients);
-    reloadOn(this.clients, 'clients', 'stores', 'machines', 'machine');
+    reloadOn(this.clients, 'clients', 'stores', 'machines');
   }
 }

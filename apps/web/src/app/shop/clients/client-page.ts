@@ -79,8 +79,8 @@ export class ClientPage implements HasChanges {
 
   constructor() {
     warnBeforeUnload(() => this.hasChanges());
-    reloadOn(this.client, 'clients', 'stores', 'machines', 'machine');
-    reloadOn(this.stores, 'stores', 'machines', 'machine');
+    reloadOn(this.client, 'clients', 'stores', 'machines');
+    reloadOn(this.stores, 'stores', 'machines');
     reloadOn(this.#allStores, 'stores');
     effect(() => {
       if (this.client.hasValue()) this.#titles.name(this.client.value().name);

@@ -45,6 +45,6 @@ export class MachineList {
 
   constructor() {
     keepInAddress(this.machines);
-    reloadOn(this.machines, 'machines', 'machine', 'stores');
+    reloadOn(this.machines, 'machines', 'stores');
   }
 }

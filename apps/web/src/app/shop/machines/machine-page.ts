@@ -90,7 +90,7 @@ export class MachinePage implements HasChanges {
 
   constructor() {
     warnBeforeUnload(() => this.hasChanges());
-    reloadOn(this.machine, 'machines', 'machine', 'visit', 'ticket');
+    reloadOn(this.machine, 'machines', 'visit', 'ticket');
     effect(() => {
       if (!this.machine.hasValue()) return;
       const { bay, store } = this.machine.value();

@@ -35,6 +35,6 @@ export class MachinesSection {
   );
 
   constructor() {
-    reloadOn(this.machines, 'machines', 'machine');
+    reloadOn(this.machines, 'machines');
   }
 }

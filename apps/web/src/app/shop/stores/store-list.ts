@@ -50,6 +50,6 @@ export class StoreList {
 
   constructor() {
     keepInAddress(this.stores);
-    reloadOn(this.stores, 'stores', 'clients', 'machines', 'machine');
+    reloadOn(this.stores, 'stores', 'clients', 'machines');
   }
 }

@@ -92,8 +92,8 @@ export class StorePage implements HasChanges {
 
   constructor() {
     warnBeforeUnload(() => this.hasChanges());
-    reloadOn(this.store, 'stores', 'machines', 'machine', 'call', 'visit');
-    reloadOn(this.floor, 'stores', 'machines', 'machine', 'conditions', 'call');
+    reloadOn(this.store, 'stores', 'machines', 'call', 'visit');
+    reloadOn(this.floor, 'stores', 'machines', 'conditions', 'call');
     effect(() => {
       if (this.store.hasValue()) this.#titles.name(this.store.value().name);
     });
