@@ -15,9 +15,16 @@ export function problemsOf(operation: Operation): ProblemType[] {
     list.add('not-allowed');
   if (operation.ifMatch) list.add('version-required').add('stale-version');
   if (storesAnswer(operation)) list.add('key-required').add('key-reused');
-  if (operation.method !== 'GET' && operation.permission !== 'public') list.add('shop-paused');
+  if (isRefusedWhilePaused(operation)) list.add('shop-paused');
   for (const type of operation.problems ?? []) list.add(type);
   return [...list];
+}
+
+/** A paused shop's people write nothing in it; their own accounts and the platform go on. */
+function isRefusedWhilePaused({ method, permission, whilePaused }: Operation): boolean {
+  const ofShop =
+    !['public', 'signed-in'].includes(permission) && !permission.startsWith('platform.');
+  return method !== 'GET' && ofShop && !whilePaused;
 }
 
 /** The OpenAPI 3.1 document of `operations`. */
@@ -65,7 +72,8 @@ function requestBody(operation: Operation): Json {
     schema.properties = { ...properties, file: { type: 'string', format: 'binary' } };
     schema.required = [...required, 'file'];
   }
-  return { required: true, content: { [operation.bodyType ?? 'application/json']: { schema } } };
+  const required = operation.bodyType !== undefined || !operation.body?.safeParse({}).success;
+  return { required, content: { [operation.bodyType ?? 'application/json']: { schema } } };
 }
 
 function success(operation: Operation): Json {

@@ -1,5 +1,5 @@
 import { type Operation } from '@lib/contracts';
-import express, { type RequestHandler } from 'express';
+import express, { type Request, type RequestHandler } from 'express';
 import multer from 'multer';
 import { problem } from '../problems/problem';
 
@@ -15,9 +15,18 @@ const json = express.json({ limit: '512kb', strict: true, type: 'application/jso
 export function readBody(operation: Operation): RequestHandler[] {
   const type = operation.bodyType ?? (operation.body ? 'application/json' : undefined);
   if (!type) return [];
-  const ofType: RequestHandler = (request, _response, next) =>
-    next(request.is(type) ? undefined : problem('unsupported-content', `Send ${type}.`));
+  const mayBeMissing = type === 'application/json';
+  const ofType: RequestHandler = (request, _response, next) => {
+    const fits = request.is(type) || (mayBeMissing && isEmpty(request));
+    next(fits ? undefined : problem('unsupported-content', `Send ${type}.`));
+  };
   return type === 'multipart/form-data' ? [ofType, readFile()] : [ofType, json];
+}
+
+/** Nothing sent is read as an object without fields: the contract says whether that will do. */
+function isEmpty(request: Request): boolean {
+  const { 'transfer-encoding': pieces, 'content-length': length } = request.headers;
+  return pieces === undefined && (length === undefined || Number(length) === 0);
 }
 
 function readFile(): RequestHandler {
