@@ -1,9 +1,7 @@
 import { Advice, progress } from './bootstrap/progress.cjs';
 import { buildServer } from './build/server';
 import { dataFolder, wantedPort } from './paths';
-import { isOurs } from './process/alive';
-import { readState } from './process/state-file';
-import { endLeftOvers, lockPath } from './stack/run-file';
+import { endLeftOvers, runningStart } from './stack/run-file';
 import { seed } from './stack/fill';
 import { Stack } from './stack/stack';
 
@@ -14,8 +12,7 @@ import { Stack } from './stack/stack';
 export async function main(args: readonly string[]): Promise<void> {
   const dataDir = dataFolder();
   await buildServer(progress);
-  const running = readState<{ pid: number }>(lockPath(dataDir));
-  if (running && isOurs(running.pid, 'infra/')) {
+  if (runningStart(dataDir) !== undefined) {
     throw new Advice(
       'Tumblewright is running.',
       'Stop it with Ctrl-C, then run this again: the seed writes past the running processes.',

@@ -1,12 +1,12 @@
 // node_modules as package-lock.json has it: installed when absent, repeated when the lock has changed.
 
 import { createHash } from 'node:crypto';
-import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { accessSync, constants, existsSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import progressModule from './progress.cjs';
 import quietRunModule from './quiet-run.cjs';
 
-const { progress } = progressModule;
+const { Advice, progress } = progressModule;
 const { quietRun } = quietRunModule;
 
 const readJson = (file) => JSON.parse(readFileSync(file, 'utf8'));
@@ -24,6 +24,18 @@ function installedMatchesLock(root) {
   });
 }
 
+function refuseUnlessWritable(root) {
+  const folder = [path.join(root, 'node_modules'), root].find(existsSync);
+  try {
+    accessSync(folder, constants.W_OK);
+  } catch {
+    throw new Advice(
+      `The packages must be installed, and you may not write to ${folder}.`,
+      'Run the command as the user it belongs to, or give it to yourself (chown -R).',
+    );
+  }
+}
+
 export async function ensurePackages(root) {
   const lock = readFileSync(path.join(root, 'package-lock.json'));
   const key = createHash('sha256')
@@ -34,6 +46,7 @@ export async function ensurePackages(root) {
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === key) return;
 
   if (!installedMatchesLock(root)) {
+    refuseUnlessWritable(root);
     const npm = process.env.npm_execpath;
     const viaNode = npm && npm.endsWith('npm-cli.js');
     const args = ['ci', '--include=dev', '--no-audit', '--no-fund'];
@@ -44,5 +57,9 @@ export async function ensurePackages(root) {
       }),
     );
   }
-  writeFileSync(stamp, key);
+  try {
+    writeFileSync(stamp, key);
+  } catch {
+    // Packages that somebody else installed for us: they are right, only looked through each time.
+  }
 }

@@ -34,11 +34,25 @@ function createProgress(write = (text) => process.stdout.write(text)) {
 
 const progress = createProgress();
 
-/** Ends a driver: an Advice is printed as it is, anything else with its stack, since it is a defect. */
+const refusedByDisk = {
+  EACCES: 'Run the command as the user it belongs to, or give it to yourself (chown).',
+  EPERM: 'Run the command as the user it belongs to, or give it to yourself (chown).',
+  EROFS: 'The disk is mounted for reading only: work in a checkout elsewhere.',
+  ENOSPC: 'The disk is full: make room, then run the command again.',
+};
+
+/** What a person needs to read: advice as it is; a defect of ours with its stack. */
+function report(error) {
+  if (error instanceof Advice) return error.message;
+  const todo = error && error.path && refusedByDisk[error.code];
+  if (todo) return `${error.path} cannot be written or read: ${error.message}\n\n${todo}`;
+  return (error && error.stack) || String(error);
+}
+
+/** Ends a driver, saying why. */
 function reportAndExit(error) {
-  const text = error instanceof Advice ? error.message : (error && error.stack) || String(error);
-  process.stderr.write(`\n${text}\n`);
+  process.stderr.write(`\n${report(error)}\n`);
   process.exit(1);
 }
 
-module.exports = { Advice, createProgress, progress, reportAndExit };
+module.exports = { Advice, createProgress, progress, report, reportAndExit };

@@ -8,3 +8,4 @@ export class Advice extends Error {
 export function createProgress(write?: (text: string) => void): Progress;
 export const progress: Progress;
 export function reportAndExit(error: unknown): never;
+export function report(error: unknown): string;

@@ -14,9 +14,18 @@ function tail(text, most = 40) {
     : lines.slice(from).join('\n');
 }
 
+const running = new Set();
+
+// Whoever is told to end by a signal alone (a service manager, CI) takes a build or an installation
+// along; at a terminal they hear of Ctrl-C themselves.
+process.on('exit', () => {
+  for (const child of running) child.kill('SIGTERM');
+});
+
 function quietRun(command, args, { todo, ...options } = {}) {
   return new Promise((resolve, reject) => {
     const child = spawn(command, args, { stdio: ['ignore', 'pipe', 'pipe'], ...options });
+    running.add(child);
     let output = '';
     const collect = (chunk) => {
       output = (output + chunk).slice(-200_000);
@@ -24,6 +33,7 @@ function quietRun(command, args, { todo, ...options } = {}) {
     child.stdout.on('data', collect);
     child.stderr.on('data', collect);
     child.on('error', (error) => reject(new Advice(`${command}: ${error.message}`, todo)));
+    child.on('exit', () => running.delete(child));
     child.on('close', (code, signal) => {
       if (code === 0) return resolve(output);
       const how = signal ? `was ended by ${signal}` : `ended with code ${code}`;

@@ -21,10 +21,19 @@ function checkNode() {
   );
 }
 
+/** By default a signal ends us without a word to the programs we started; a driver may know better. */
+function leaveOn(signal, code) {
+  process.once(signal, () => {
+    if (process.listenerCount(signal) === 0) process.exit(code);
+  });
+}
+
 /** Makes ready what `needs` names, then runs the driver `infra/<driver>.ts`. */
 export async function run(driver, needs = {}) {
   try {
     checkNode();
+    leaveOn('SIGINT', 130);
+    leaveOn('SIGTERM', 143);
     process.chdir(root);
     await ensurePackages(root);
     if (needs.postgres) await ensurePostgres();

@@ -1,4 +1,4 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, statSync } from 'node:fs';
 import { setTimeout as wait } from 'node:timers/promises';
 
 export function isAlive(pid: number): boolean {
@@ -36,6 +36,29 @@ export function isOurs(pid: number, mark: string): boolean {
   if (!isAlive(pid)) return false;
   const line = commandLine(pid);
   return line === undefined || line.includes(mark);
+}
+
+/** When a process began, in milliseconds as Date.now() counts; undefined where nothing says so. */
+function beganAt(pid: number): number | undefined {
+  try {
+    const boot = /^btime (\d+)$/m.exec(readFileSync('/proc/stat', 'utf8'))?.[1];
+    // The name in brackets may hold anything; after it, the twentieth word counts ticks of 10 ms.
+    const after = readFileSync(`/proc/${pid}/stat`, 'utf8').split(')').pop() ?? '';
+    const ticks = after.trim().split(' ')[19];
+    return boot && ticks ? Number(boot) * 1_000 + Number(ticks) * 10 : undefined;
+  } catch {
+    return undefined;
+  }
+}
+
+/**
+ * Ours, and the one that the file means: after a restart of the machine the number soon belongs to
+ * a stranger, who began after the file was written.
+ */
+export function isNamedBy(file: string, pid: number, mark: string): boolean {
+  if (!existsSync(file) || !isOurs(pid, mark)) return false;
+  const began = beganAt(pid);
+  return began === undefined || began <= statSync(file).mtimeMs + 5_000;
 }
 
 export function signal(pid: number, name: NodeJS.Signals): void {

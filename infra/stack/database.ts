@@ -39,6 +39,11 @@ function withUser(address: string, user: string, password: string): string {
   return url.href;
 }
 
+function neverAnswered(error: unknown): boolean {
+  const code = (error as { code?: string }).code ?? '';
+  return ['ECONNREFUSED', 'ENOTFOUND', 'EAI_AGAIN', 'EHOSTUNREACH', 'ETIMEDOUT'].includes(code);
+}
+
 /**
  * A database of somebody else's: DATABASE_URL is its owner's address. The two roles that serve are
  * either given by address too, or made here when the owner may make roles.
@@ -70,6 +75,12 @@ export async function useGivenDatabase(ownerUrl: string, dataDir: string): Promi
     await withClient(urls.platformUrl, (client) => client.query('SELECT 1'));
     return urls;
   } catch (error) {
+    if (neverAnswered(error)) {
+      throw new Advice(
+        `The database of DATABASE_URL does not answer: ${(error as Error).message}`,
+        'Check host and port, and that the server runs; or unset DATABASE_URL for a private one.',
+      );
+    }
     throw new Advice(
       `The database of DATABASE_URL cannot be used: ${(error as Error).message}`,
       [

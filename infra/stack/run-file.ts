@@ -1,7 +1,7 @@
 import { existsSync } from 'node:fs';
 import path from 'node:path';
 import { Advice } from '../bootstrap/progress.cjs';
-import { endProcess, isOurs } from '../process/alive';
+import { endProcess, isNamedBy } from '../process/alive';
 import { readState } from '../process/state-file';
 
 export interface Account {
@@ -39,9 +39,9 @@ export function readAccounts(dataDir: string): Account[] {
 
 /** Refuses when the same data folder is in use by a start that still runs. */
 export function refuseSecondStart(dataDir: string): void {
+  const pid = runningStart(dataDir);
+  if (pid === undefined) return;
   const before = readState<RunFile>(runFilePath(dataDir));
-  const pid = before?.pids.start ?? readState<{ pid: number }>(lockPath(dataDir))?.pid;
-  if (!pid || pid === process.pid || !isOurs(pid, 'infra/')) return;
   throw new Advice(
     `Tumblewright is running already (process ${pid})${before ? `: ${before.web}` : ''}.`,
     'Stop it with Ctrl-C where it was started, or start another beside it with its own data:\n' +
@@ -53,11 +53,20 @@ export function lockPath(dataDir: string): string {
   return path.join(dataDir, 'start.json');
 }
 
+/** The process that holds this data folder now. */
+export function runningStart(dataDir: string): number | undefined {
+  const lock = lockPath(dataDir);
+  const pid = readState<{ pid: number }>(lock)?.pid;
+  if (!pid || pid === process.pid || !isNamedBy(lock, pid, 'infra/')) return undefined;
+  return pid;
+}
+
 /** Ends what a killed start left running; PostgreSQL is looked after by its own folder. */
 export async function endLeftOvers(dataDir: string): Promise<void> {
-  const before = readState<RunFile>(runFilePath(dataDir));
+  const file = runFilePath(dataDir);
+  const before = readState<RunFile>(file);
   const pids = before ? [before.pids.web, before.pids.worker] : [];
   await Promise.all(
-    pids.filter((pid) => pid && isOurs(pid, 'server')).map((pid) => endProcess(pid)),
+    pids.filter((pid) => pid && isNamedBy(file, pid, 'server')).map((pid) => endProcess(pid)),
   );
 }

@@ -2,6 +2,7 @@ import { mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { Advice, progress, reportAndExit } from '../bootstrap/progress.cjs';
 import { writeState } from '../process/state-file';
+import { stopSignals } from '../process/stop-signals';
 import { endLeftOvers, lockPath, refuseSecondStart } from './run-file';
 import { type Stack } from './stack';
 
@@ -44,14 +45,16 @@ export async function runAtKeyboard(
     progress.say('Stopped.');
     process.exit(code);
   };
-  const onSignal = (): void => {
-    if (stopping) {
+  const onSignal = stopSignals({
+    stop: () => {
+      progress.say('\nStopping (Ctrl-C again to force) ...');
+      stop(0).then(undefined, reportAndExit);
+    },
+    force: () => {
       stack.forceStop();
       process.exit(130);
-    }
-    progress.say('\nStopping (Ctrl-C again to force) ...');
-    stop(0).then(undefined, reportAndExit);
-  };
+    },
+  });
   for (const name of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(name, onSignal);
   whenParentIsGone(onSignal);
   // A closed terminal must not keep the rest from ending in order.

@@ -246,6 +246,10 @@ export class Stack {
         : {
             STRIPE_SECRET_KEY: process.env.STRIPE_SECRET_KEY ?? '',
             STRIPE_WEBHOOK_SECRET: process.env.STRIPE_WEBHOOK_SECRET ?? '',
+            // A stand-in of one's own; Stripe itself when not given.
+            ...(process.env.STRIPE_API_BASE
+              ? { STRIPE_API_BASE: process.env.STRIPE_API_BASE }
+              : {}),
           }),
       ...this.options.env,
     };
