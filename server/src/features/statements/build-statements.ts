@@ -6,9 +6,10 @@ import { type Job } from '../../core/jobs/work';
 import { type Log } from '../../core/logging';
 import { type ShopFacts, shopFacts } from '../../core/shop-facts';
 import { monthsToState } from './fees-due';
+import { type RunFacts } from './built-statement';
 import { moveRun } from './move-run';
 import { noteFailures } from './note-failures';
-import { type RunFacts, stateStores } from './state-stores';
+import { stateStores } from './state-stores';
 
 /** Stores of one job; what is left after them is the next job's. */
 const chunk = 200;

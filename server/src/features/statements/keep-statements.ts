@@ -4,7 +4,7 @@ import { type Context } from '../../core/context';
 import { write } from '../../core/database/tenancy';
 import { postDocuments } from '../ledger/post';
 import { applyCredits } from '../receivables/apply-credits';
-import { type BuiltStatement, type RunFacts } from './state-stores';
+import { type BuiltStatement, type RunFacts } from './built-statement';
 
 /** Writes down statements just built: what they say, what stands on them, and what is owed by them. */
 export async function keepStatements(

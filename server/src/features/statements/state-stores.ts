@@ -1,51 +1,15 @@
-import {
-  type IsoDate,
-  type Month,
-  agreesWith,
-  buildStatement,
-  monthBounds,
-  type StatementSnapshot,
-} from '@lib/domain';
+import { agreesWith, buildStatement, monthBounds, type StatementSnapshot } from '@lib/domain';
 import { v7 as uuid } from 'uuid';
 import { type Context } from '../../core/context';
 import { nextNumber } from '../../core/counters';
 import { rows, withTenant } from '../../core/database/tenancy';
 import { type ShopFacts } from '../../core/shop-facts';
 import { statementName } from './document-names';
+import { type BuiltStatement, type RunFacts, type StoreToState } from './built-statement';
 import { dueDocuments } from './due-documents';
 import { keepStatements } from './keep-statements';
 import { makeFees } from './make-fees';
 import { noteFailures, type StoreFailure } from './note-failures';
-import { type StoredSnapshot } from './stored-snapshot';
-
-/** What is the same for every store of a run. */
-export interface RunFacts {
-  id: string;
-  month: Month;
-  revision: number;
-  /** The day all its statements are dated, whenever they come to be built. */
-  issuedOn: IsoDate;
-  /** Months it takes in: usually one, more when some were left out. */
-  months: Month[];
-}
-
-export interface StoreToState {
-  /** Of its row of the run. */
-  rowId: string;
-  id: string;
-  name: string;
-  address: string;
-  clientId: string;
-  clientName: string;
-  termsDays: number | null;
-}
-
-export interface BuiltStatement {
-  id: string;
-  number: number;
-  store: StoreToState;
-  snapshot: StoredSnapshot;
-}
 
 /**
  * Builds, posts and numbers the statements of some stores, in one transaction: either all of them
