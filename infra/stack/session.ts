@@ -1,4 +1,4 @@
-import { mkdirSync, rmSync } from 'node:fs';
+import { accessSync, constants, existsSync, mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { Advice, progress, reportAndExit } from '../bootstrap/progress.cjs';
 import { writeState } from '../process/state-file';
@@ -9,6 +9,8 @@ import { type Stack } from './stack';
 function claim(dataDir: string, lock: string): void {
   try {
     mkdirSync(dataDir, { recursive: true });
+    const written = ['files', 'logs', 'mailbox'].map((name) => path.join(dataDir, name));
+    for (const folder of written) if (existsSync(folder)) accessSync(folder, constants.W_OK);
     writeState(lock, { pid: process.pid });
   } catch (error) {
     throw new Advice(
