@@ -10,11 +10,12 @@ export async function record(
   details: Record<string, unknown> = {},
 ): Promise<void> {
   await write(
-    `insert into audit (shop_id, id, by_user_id, by_name, what, subject_kind, subject_id, details, request_id)
-     values ($shopId, $id, $userId, $name, $what, $kind, $subjectId, $details, $requestId)`,
+    `insert into audit (shop_id, id, at, by_user_id, by_name, what, subject_kind, subject_id, details, request_id)
+     values ($shopId, $id, $now, $userId, $name, $what, $kind, $subjectId, $details, $requestId)`,
     {
       shopId: context.shopId,
       id: uuid(),
+      now: context.now,
       userId: context.userId,
       name: context.name,
       what,

@@ -38,7 +38,7 @@ export function thinkUpJob(
     return age > 6 && age < 75 && !taken.has(job.machineId);
   });
   const earlier = recent.length > 0 && random.chance(0.22) ? random.pick(recent) : undefined;
-  if (earlier) return comeBack(store, earlier, random);
+  if (earlier) return comeBack(store, earlier, random.chance(0.45));
   const free = store.machines.filter((machine) => !taken.has(machine.id));
   const machine = random.pick(free.length ? free : store.machines);
   if (random.chance(0.16)) return nothingFound(machine, random);
@@ -58,15 +58,14 @@ export function thinkUpJob(
 }
 
 /** The same machine again: our own mistake, or what we fitted did not last. */
-function comeBack(store: DemoStore, earlier: PastJob, random: Random): JobStory {
+export function comeBack(store: DemoStore, earlier: PastJob, ours: boolean): JobStory {
   const machine = store.machines.find((m) => m.id === earlier.machineId) as DemoMachine;
-  const ours = random.chance(0.45);
   return {
     machine,
     fault: earlier.fault,
     words: earlier.fault.reported,
     mark: ours ? 'own_mistake' : 'shop_warranty',
-    markWords: ours ? 'We left it crooked the last time' : 'Fitted by us a few weeks ago',
+    markWords: ours ? 'We did not set it right the last time' : 'Fitted by us a few weeks ago',
     causedByJobId: ours ? earlier.jobId : null,
     cause: ours ? 'shop_error' : 'wear',
     minutes: earlier.fault.minutes,

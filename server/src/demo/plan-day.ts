@@ -3,6 +3,7 @@ import { ask } from './ask';
 import { finishWork, type JobStory, type PastJob, thinkUpJob } from './day-story';
 import { type Person } from './people';
 import { type Random } from './random';
+import { reportFault } from './report-fault';
 import { type DemoShop, type DemoStore } from './set-up';
 
 /** A visit of the next working day, and what will be found on it. */
@@ -21,16 +22,25 @@ export async function planNext(
   day: DateTime,
   past: Map<string, PastJob[]>,
   random: Random,
-  daysLeft: number,
+  today: DateTime,
 ): Promise<Planned[]> {
-  const next = day.plus({ days: day.weekday === 5 ? 3 : 1 });
+  const next = dayAfter(day, today);
+  const toCome = next >= today;
+  const isToday = next.hasSame(today, 'day');
+  // The first tech has a visit at the first store today, for whoever tries the demo as them; and
+  // somebody was out the days before, so that something is left to rule on.
+  const last = today.diff(next, 'days').days < 4;
+  const sure = last ? shop.stores[isToday ? 0 : day.day % shop.stores.length] : undefined;
+  // Nothing happens later than now: what is planned today was reported and planned yesterday.
+  const afternoon = day < today ? day : day.minus({ days: 1 });
   const planned: Planned[] = [];
   for (const store of shop.stores) {
     const waiting = await openCallsOf(shop, store, day);
     // The days one looks at are busy ones.
-    const busy = daysLeft < 2 ? 0.6 : store.plan.visitsAMonth / 21 + waiting.size * 0.3;
-    if (!random.chance(busy)) continue;
-    const tech = shop.techs[(planned.length + day.day) % shop.techs.length] as Person;
+    const busy = toCome ? 0.6 : store.plan.visitsAMonth / 21 + waiting.size * 0.3;
+    if (store !== sure && !random.chance(busy)) continue;
+    const turn = planned.length + (isToday ? 0 : day.day);
+    const tech = shop.techs[turn % shop.techs.length] as Person;
     const again = store.machines.filter((machine) => waiting.has(machine.id));
     const stories = [
       ...again.map((machine) => finishWork(machine, random)),
@@ -41,12 +51,13 @@ export async function planNext(
       shop,
       store,
       stories.slice(again.length),
-      day.set({ hour: 10 + random.below(6) }),
+      afternoon.set({ hour: 10 + random.below(6) }),
       random,
+      toCome,
     );
     for (const [machineId, callId] of waiting) calls.set(machineId, callId);
     const visit = await ask(
-      shop.office.at(day.set({ hour: 16, minute: 40 }).toJSDate()),
+      shop.office.at(afternoon.set({ hour: 16, minute: 40 }).toJSDate()),
       'visits.plan',
       {
         body: {
@@ -62,15 +73,26 @@ export async function planNext(
         },
       },
     );
-    if (daysLeft < 2 && random.chance(0.5)) {
-      await ask(shop.office.at(day.set({ hour: 16, minute: 50 }).toJSDate()), 'visits.confirm', {
-        params: { visitId: visit.id },
-        version: visit.version,
-      });
+    if (toCome && random.chance(0.5)) {
+      await ask(
+        shop.office.at(afternoon.set({ hour: 16, minute: 50 }).toJSDate()),
+        'visits.confirm',
+        {
+          params: { visitId: visit.id },
+          version: visit.version,
+        },
+      );
     }
     planned.push({ visitId: visit.id, store, tech, stories, calls, hour });
   }
   return planned;
+}
+
+/** The next working day; at a weekend somebody goes out on the very day, so that it is no empty one. */
+function dayAfter(day: DateTime, today: DateTime): DateTime {
+  if (day.weekday !== 5) return day.plus({ days: 1 });
+  const monday = day.plus({ days: 3 });
+  return today > day && today < monday ? today : monday;
 }
 
 export function thinkUp(
@@ -96,22 +118,13 @@ async function takeCalls(
   stories: readonly JobStory[],
   at: DateTime,
   random: Random,
+  stands: boolean,
 ): Promise<Map<string, string>> {
   const calls = new Map<string, string>();
   for (const story of stories) {
     if (calls.size > 0 && random.chance(0.4)) continue;
-    const byStore = random.chance(0.5);
-    const caller = byStore ? store.attendant : shop.office;
-    const call = await ask(caller.at(at.toJSDate()), 'calls.report', {
-      body: {
-        storeId: store.id,
-        machineId: story.machine.id,
-        symptom: story.fault?.symptom ?? 'other',
-        words: story.words,
-        ...(byStore ? {} : { reportedBy: store.plan.attendant }),
-      },
-    });
-    calls.set(story.machine.id, call.id);
+    const by = random.chance(0.5) ? 'attendant' : 'office';
+    calls.set(story.machine.id, await reportFault(shop, store, story, { at, by, stands }));
   }
   return calls;
 }

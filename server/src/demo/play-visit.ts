@@ -19,6 +19,7 @@ export async function playVisit(
   calls: ReadonlyMap<string, string>,
   arrival: Date,
   random: Random,
+  finished: readonly string[] = [],
 ): Promise<PastJob[]> {
   const acts: Act[] = [];
   let clock = arrival.getTime();
@@ -36,6 +37,7 @@ export async function playVisit(
       done.push({ jobId, machineId: story.machine.id, fault: story.fault, day: arrival });
     }
   }
+  for (const openItemId of finished) say('open_item_done', { openItemId });
   say('left', {});
   say('signed_off', { receivedBy: random.chance(0.6) ? 'the attendant' : null });
   const { results } = await ask(tech.at(new Date(clock + 60_000)), 'acts.record', {
@@ -92,11 +94,14 @@ function sayJob(
     });
   }
   if (story.left === 'put_right') say('test_cycle', { jobId, cycles: 1, coins: 8, amount: 200 });
-  if (story.left === 'unfinished') {
+  if (story.left !== 'put_right') {
     say('handed_over', {
       openItemId: uuid(),
       machineId: machine.id,
-      words: `${machine.bay}: fit the part that is on order`,
+      words:
+        story.left === 'unfinished'
+          ? 'Fit the part that is on order'
+          : 'Made safe: see that its lead was renewed, then test it',
     });
   }
   say('job_done', {

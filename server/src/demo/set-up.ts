@@ -243,8 +243,7 @@ async function addBank(
 }
 
 async function addConditions(shop: DemoShop, store: DemoStore, opened: Date): Promise<void> {
-  for (const condition of store.plan.conditions) {
-    const bay = /[A-Z]-\d\d/.exec(condition.words)?.[0];
+  for (const { bay, ...condition } of store.plan.conditions) {
     await ask(shop.office.at(opened), 'conditions.create', {
       body: {
         storeId: store.id,

@@ -44,6 +44,8 @@ export interface StorePlan {
   pays: 'at once' | 'late' | 'never';
   conditions: {
     kind: 'access' | 'supply' | 'hazard';
+    /** Of one machine; else of the whole store. */
+    bay?: string;
     words: string;
     extraMinutes: number;
     tool: string;
@@ -129,7 +131,8 @@ export const brackwater: ShopPlan = {
             },
             {
               kind: 'hazard',
-              words: 'A-06 on a makeshift lead: do not energise it; a licensed electrician decides',
+              bay: 'A-06',
+              words: 'Makeshift lead: do not energise it; a licensed electrician decides',
               extraMinutes: 0,
               tool: '',
             },

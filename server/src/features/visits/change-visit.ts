@@ -43,7 +43,7 @@ export function changeVisit(
     await update(context, visitId, version, `${set}${moved(visit, body, bind)}`, bind);
     await record(
       context,
-      'visit changed',
+      `visit ${visit.number} changed`,
       { kind: 'visit', id: visitId },
       {
         fields: Object.keys(body),
@@ -73,7 +73,7 @@ export function confirmVisit(context: Context, visitId: string, version: number)
     await update(context, visitId, version, `state = 'confirmed', confirmed_at = $now`, {
       now: context.now,
     });
-    await record(context, 'visit confirmed', { kind: 'visit', id: visitId });
+    await record(context, `visit ${visit.number} confirmed`, { kind: 'visit', id: visitId });
     await announce(context, 'visit', visitId, visit.clientId);
     return showVisit(context, visitId);
   });
@@ -94,7 +94,8 @@ export function cancelVisit(
     }
     await update(context, visitId, version, `state = 'cancelled'`, {});
     await setCalls(context, visit, []);
-    await record(context, 'visit cancelled', { kind: 'visit', id: visitId }, { words });
+    const subject = { kind: 'visit', id: visitId };
+    await record(context, `visit ${visit.number} cancelled`, subject, { words });
     await announce(context, 'visit', visitId, visit.clientId);
     return showVisit(context, visitId);
   });
@@ -106,6 +107,7 @@ function said(state: VisitState): string {
 
 interface VisitToChange {
   id: string;
+  number: number;
   state: VisitState;
   storeId: string;
   clientId: string;
@@ -121,7 +123,7 @@ interface VisitToChange {
 async function visitToChange(context: Context, visitId: string): Promise<VisitToChange> {
   return found(
     await row<VisitToChange>(
-      `select v.id, v.state, v.store_id as "storeId", v.client_id as "clientId",
+      `select v.id, v.number, v.state, v.store_id as "storeId", v.client_id as "clientId",
          v.planned_on as "plannedOn", z.zone, v.ticket_id as "ticketId",
          to_char(v.window_start at time zone z.zone, 'HH24:MI') as from,
          to_char(v.window_end at time zone z.zone, 'HH24:MI') as until,

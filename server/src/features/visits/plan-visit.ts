@@ -35,6 +35,7 @@ export async function addVisit(context: Context, plan: VisitToPlan): Promise<str
   if (plan.techMembershipId) await refuseOutsider(context, plan.techMembershipId);
   const id = uuid();
   const window = windowAt(plan.plannedOn, plan.window, store.zone);
+  const number = await nextNumber(context, 'visit');
   await write(
     `insert into visits (shop_id, id, client_id, store_id, number, tech_membership_id, planned_on,
        window_start, window_end, reason, round_id, created_at)
@@ -45,7 +46,7 @@ export async function addVisit(context: Context, plan: VisitToPlan): Promise<str
       id,
       clientId: store.clientId,
       storeId: plan.storeId,
-      number: await nextNumber(context, 'visit'),
+      number,
       techMembershipId: plan.techMembershipId ?? null,
       plannedOn: plan.plannedOn,
       ...window,
@@ -55,7 +56,7 @@ export async function addVisit(context: Context, plan: VisitToPlan): Promise<str
     },
   );
   await setCalls(context, { id, storeId: plan.storeId, clientId: store.clientId }, plan.callIds);
-  await record(context, 'visit planned', { kind: 'visit', id });
+  await record(context, `visit ${number} planned`, { kind: 'visit', id });
   await announce(context, 'visit', id, store.clientId);
   return id;
 }
