@@ -31,7 +31,15 @@ export { Reading } from './format/reading';
 export { StatusLine } from './notes/status-line';
 export { TicketCard } from './ticket/ticket-card';
 export { ClockPipe, DayPipe, InstantPipe, MinutesPipe, MonthPipe } from './format/time-pipes';
-export { clockText, dayIn, dayText, instantText, minutesText, monthText } from './format/times';
+export {
+  clockText,
+  dayIn,
+  dayText,
+  instantText,
+  minutesText,
+  monthText,
+  timeText,
+} from './format/times';
 export {
   type Colour,
   colours,

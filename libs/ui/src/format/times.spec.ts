@@ -1,7 +1,7 @@
 import { TestBed } from '@angular/core/testing';
 import { Reading } from './reading';
 import { ClockPipe, DayPipe, InstantPipe, MinutesPipe, MonthPipe } from './time-pipes';
-import { clockText, dayIn, dayText, instantText, minutesText, monthText } from './times';
+import { clockText, dayIn, dayText, instantText, minutesText, monthText, timeText } from './times';
 
 describe('times as people read them', () => {
   it('shows a trade day as that day, whatever the zone of the device', () => {
@@ -13,6 +13,13 @@ describe('times as people read them', () => {
     expect(instantText('2031-05-06T23:30:00Z', 'en-GB', 'Asia/Tokyo')).toBe('7 May 2031, 08:30');
     expect(clockText('2031-05-06T23:30:00Z', 'en-GB', 'Europe/London')).toBe('00:30');
     expect(dayIn('America/New_York', new Date('2031-05-07T03:00:00Z'))).toBe('2031-05-06');
+  });
+
+  it("writes the hour as the shop's language does", () => {
+    const plain = (text: string) => text.replaceAll(/\s/g, ' ');
+    expect(plain(clockText('2031-05-06T09:30:00Z', 'en-US', 'UTC'))).toBe('9:30 AM');
+    expect(plain(timeText('09:00', 'en-US'))).toBe('9:00 AM');
+    expect(timeText('09:00', 'en-GB')).toBe('09:00');
   });
 
   it.each([

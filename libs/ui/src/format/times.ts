@@ -10,6 +10,11 @@ function format(locale: string, options: Intl.DateTimeFormatOptions): Intl.DateT
   return found;
 }
 
+/** "9:00 AM" where the day has two halves, "09:00" where it has one. */
+function hourOf(locale: string): 'numeric' | '2-digit' {
+  return format(locale, { hour: 'numeric' }).resolvedOptions().hour12 ? 'numeric' : '2-digit';
+}
+
 /** A trade day, `2031-05-06`: "Tue, May 6, 2031". It has no zone: it is the shop's own day. */
 export function dayText(day: string, locale: string): string {
   return format(locale, {
@@ -34,7 +39,7 @@ export function instantText(instant: string, locale: string, zone: string): stri
     day: 'numeric',
     month: 'short',
     year: 'numeric',
-    hour: '2-digit',
+    hour: hourOf(locale),
     minute: '2-digit',
     timeZone: zone,
   }).format(new Date(instant));
@@ -42,9 +47,14 @@ export function instantText(instant: string, locale: string, zone: string): stri
 
 /** Only the time of an instant: "10:30". */
 export function clockText(instant: string, locale: string, zone: string): string {
-  return format(locale, { hour: '2-digit', minute: '2-digit', timeZone: zone }).format(
+  return format(locale, { hour: hourOf(locale), minute: '2-digit', timeZone: zone }).format(
     new Date(instant),
   );
+}
+
+/** A time agreed without a day, `09:00`, as the clock shows it: "9:00 AM". */
+export function timeText(time: string, locale: string): string {
+  return clockText(`1970-01-01T${time}:00Z`, locale, 'UTC');
 }
 
 /** 95 minutes: "1 h 35 min". */
