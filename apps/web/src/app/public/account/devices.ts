@@ -10,6 +10,7 @@ import { type Problem, problemFrom } from '../../core/api/problem';
 import { Confirm } from '../../core/confirm/confirm';
 import { LocalKeepings } from '../../core/session/leaving';
 import { Session } from '../../core/session/session';
+import { deviceWords } from './device-words';
 
 /** Where the person is signed in, and the way to end all of it. */
 @Component({
@@ -24,7 +25,7 @@ import { Session } from '../../core/session/session';
     <ul>
       @for (device of devices(); track device.id) {
         <li>
-          <strong>{{ device.device }}</strong>
+          <strong>{{ deviceWords(device.device) }}</strong>
           @if (device.current) {
             <span>, this device</span>
           }
@@ -63,6 +64,7 @@ export class Devices {
   readonly #router = inject(Router);
   readonly #session = inject(Session);
 
+  protected readonly deviceWords = deviceWords;
   protected readonly devices = signal<AnswerOf<'session.list'>['items']>([]);
   protected readonly problem = signal<Problem | undefined>(undefined);
 
