@@ -63,7 +63,12 @@ export class AreaFrame {
   });
   protected readonly belongsTo = computed(() => {
     const membership = this.session.membership();
-    return membership?.clientName ?? this.session.shop()?.name ?? membership?.shopName ?? '';
+    return (
+      membership?.clientName ??
+      this.session.shop()?.name ??
+      membership?.shopName ??
+      this.area().name
+    );
   });
 
   constructor() {

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { EmptyNote, LoadNote, MoneyText, PageHead } from '@lib/ui';
+import { EmptyNote, LoadNote, MoneyText, PageHead, Reading } from '@lib/ui';
 import { Session } from '../../core/session/session';
 import { PlatformApi } from '../platform-api';
 
@@ -44,12 +44,18 @@ import { PlatformApi } from '../platform-api';
                 <td class="num" data-label="A month">
                   <tw-money [amount]="plan.monthlyAmount" [currency]="plan.currency" />
                 </td>
-                <td class="num" data-label="Stores">{{ plan.storeLimit }}</td>
-                <td class="num" data-label="Machines">{{ plan.machineLimit }}</td>
-                <td class="num" data-label="Crew">{{ plan.crewLimit }}</td>
+                <td class="num" data-label="Stores">
+                  {{ plan.storeLimit.toLocaleString(locale()) }}
+                </td>
+                <td class="num" data-label="Machines">
+                  {{ plan.machineLimit.toLocaleString(locale()) }}
+                </td>
+                <td class="num" data-label="Crew">{{ plan.crewLimit.toLocaleString(locale()) }}</td>
                 <td class="num" data-label="Trial">{{ plan.trialDays }} days</td>
                 <td class="num" data-label="Grace">{{ plan.graceDays }} days</td>
-                <td class="num" data-label="Shops on it">{{ plan.shops }}</td>
+                <td class="num" data-label="Shops on it">
+                  {{ plan.shops.toLocaleString(locale()) }}
+                </td>
               </tr>
             }
           </tbody>
@@ -67,6 +73,7 @@ import { PlatformApi } from '../platform-api';
 export class PlanList {
   readonly #api = inject(PlatformApi);
   protected readonly session = inject(Session);
+  protected readonly locale = inject(Reading).locale;
 
   protected readonly plans = rxResource({ stream: () => this.#api.plans() });
 }

@@ -17,6 +17,7 @@ import {
   LoadNote,
   MoneyText,
   PageHead,
+  Reading,
   SectionHead,
   TicketCard,
 } from '@lib/ui';
@@ -91,6 +92,7 @@ export class ShopPage implements HasChanges {
   readonly #messages = inject(Messages);
   readonly #titles = inject(Titles);
   protected readonly session = inject(Session);
+  protected readonly locale = inject(Reading).locale;
   protected readonly stateWords = stateWords;
   protected readonly needsLook = needsLook;
   protected readonly eventWords = eventWords;

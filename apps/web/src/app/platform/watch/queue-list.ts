@@ -3,6 +3,7 @@ import { rxResource, takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { InstantPipe, LoadNote, PageHead } from '@lib/ui';
 import { filter, interval } from 'rxjs';
 import { PlatformApi } from '../platform-api';
+import { queueWords } from './queue-words';
 
 /** Queues announce nothing, so the page looks again by itself. */
 const everyMilliseconds = 10_000;
@@ -31,7 +32,7 @@ const everyMilliseconds = 10_000;
         <tbody>
           @for (queue of queues.value().items; track queue.queue) {
             <tr>
-              <th scope="row">{{ queue.queue }}</th>
+              <th scope="row">{{ queueWords(queue.queue) }}</th>
               <td class="num" data-label="Waiting">{{ queue.waiting }}</td>
               <td class="num" data-label="Being done">{{ queue.active }}</td>
               <td class="num" data-label="Failed in a day" [class.alarm]="queue.failed > 0">
@@ -52,6 +53,7 @@ const everyMilliseconds = 10_000;
 export class QueueList {
   readonly #api = inject(PlatformApi);
 
+  protected readonly queueWords = queueWords;
   protected readonly queues = rxResource({ stream: () => this.#api.queues() });
 
   constructor() {
