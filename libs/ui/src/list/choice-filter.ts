@@ -23,7 +23,9 @@ import { type Choice } from '../choices/choice-chips';
   `,
   styles: `
     :host {
-      flex: 1 1 9rem;
+      flex: 1 1 8.5rem;
+      // Its longest choice may be cut, so that two filters stand side by side on a phone.
+      min-inline-size: 0;
       max-inline-size: 13rem;
     }
     mat-form-field {

@@ -28,6 +28,9 @@ import { callWords, machineStanding, visitPurpose, visitStanding } from './step-
       color: var(--tw-soft);
       font-size: 0.875rem;
     }
+    .time {
+      white-space: nowrap;
+    }
     a {
       color: var(--tw-ink);
       text-decoration: none;

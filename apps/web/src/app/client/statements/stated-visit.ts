@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
+import { ticketName } from '@lib/domain/words/document-name';
 import { MoneyText } from '@lib/ui/format/money-text';
 import { BearerLabel } from '@lib/ui/notes/bearer-label';
 import { TicketCard } from '@lib/ui/ticket/ticket-card';
@@ -21,6 +22,7 @@ export class StatedVisit {
   readonly visit = input.required<Visit>();
 
   protected readonly sign = moneySign();
+  protected readonly ticketName = ticketName;
   protected readonly rows = computed(() => {
     const { jobs, lines } = this.visit();
     const ofJobs = jobs.map((job) => ({

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, input } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { RouterLink } from '@angular/router';
+import { ticketName } from '@lib/domain/words/document-name';
 import { Reading } from '@lib/ui/format/reading';
 import { ClockPipe, DayPipe, InstantPipe } from '@lib/ui/format/time-pipes';
 import { dayText } from '@lib/ui/format/times';
@@ -68,6 +69,7 @@ export class VisitPage {
   readonly #reading = inject(Reading);
   readonly #titles = inject(Titles);
   protected readonly fault = faultText;
+  protected readonly ticketName = ticketName;
 
   readonly visitId = input.required<string>();
 

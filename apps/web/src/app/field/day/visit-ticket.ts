@@ -13,7 +13,7 @@ import { type Sheet } from '../kept/kept';
       <div stub>
         @if (visit().window; as window) {
           <span class="time tw-figures">{{ window.from | twClock }}</span>
-          <span class="tw-soft tw-figures">to {{ window.until | twClock }}</span>
+          <span class="until tw-soft tw-figures">to {{ window.until | twClock }}</span>
         } @else {
           <span class="time">any time</span>
         }
@@ -45,6 +45,13 @@ import { type Sheet } from '../kept/kept';
     }
     [stub] span {
       display: block;
+    }
+    .time,
+    .until {
+      white-space: nowrap;
+    }
+    .until {
+      font-size: 0.875rem;
     }
     h2 {
       margin: 0;

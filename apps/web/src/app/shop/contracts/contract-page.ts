@@ -20,6 +20,7 @@ import {
   PageHead,
   Reading,
   SectionHead,
+  timeText,
 } from '@lib/ui';
 import { OpenForms } from '../../core/forms/open-forms';
 import { type HasChanges, warnBeforeUnload } from '../../core/forms/unsaved-changes';
@@ -62,10 +63,6 @@ import { RoundTable } from './round-table';
       max-inline-size: 36rem;
       margin-block-end: 0.5rem;
     }
-    .rule {
-      font-size: 0.875rem;
-      color: var(--tw-soft);
-    }
     tw-end-contract {
       display: block;
       margin-block-end: 1.5rem;
@@ -102,6 +99,11 @@ export class ContractPage implements HasChanges {
     };
     return `${ruleWords.charAt(0).toUpperCase()}${ruleWords.slice(1)}. ${closed[shift]}`;
   });
+  protected readonly startTime = computed(() =>
+    this.contract.hasValue()
+      ? timeText(this.contract.value().startTime, this.#reading.locale())
+      : '',
+  );
   protected readonly stateWords = computed(() => {
     if (!this.contract.hasValue()) return '';
     const { state, startsOn, endsOn } = this.contract.value();

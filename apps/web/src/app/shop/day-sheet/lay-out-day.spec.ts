@@ -53,7 +53,7 @@ describe('what does not go well on a day', () => {
 
   it('is two visits of a tech at one time', () => {
     const [a, b, c] = [visit('09:00', '11:00'), visit('10:30', '12:00'), visit('12:00', '13:00')];
-    expect(troubleOf(a, [a, b, c], morning)).toBe(`at the time of ${b.store.name}`);
+    expect(troubleOf(a, [a, b, c], morning)).toBe(`overlaps ${b.store.name}`);
     expect(troubleOf(c, [a, b, c], morning)).toBe('');
   });
 

@@ -80,7 +80,7 @@ export function troubleOf(visit: VisitItem, ofTech: readonly VisitItem[], now: D
       Date.parse(each.window.from) < Date.parse(window.until) &&
       Date.parse(window.from) < Date.parse(each.window.until),
   );
-  return other ? `at the time of ${other.store.name}` : '';
+  return other ? `overlaps ${other.store.name}` : '';
 }
 
 function minutesIn(zone: string, instant: string): number {

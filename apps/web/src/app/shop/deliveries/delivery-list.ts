@@ -9,12 +9,10 @@ import {
   ChoiceFilter,
   counted,
   InstantPipe,
-  instantText,
   labelFor,
   ListShell,
   listState,
   PageHead,
-  Reading,
 } from '@lib/ui';
 import { RowsExport } from '../../core/lists/rows-export';
 import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
@@ -41,13 +39,15 @@ const states: readonly DeliveryState[] = ['waiting', 'handing_over', 'sent', 'fa
   templateUrl: './delivery-list.html',
   styles: `
     .address,
-    .error {
+    .error,
+    .sent {
       display: block;
       font-weight: 400;
       font-size: 0.875rem;
       overflow-wrap: anywhere;
     }
-    .made {
+    .made,
+    .sent {
       white-space: nowrap;
     }
     tw-callout {
@@ -59,7 +59,6 @@ const states: readonly DeliveryState[] = ['waiting', 'handing_over', 'sent', 'fa
 export class DeliveryList {
   readonly #api = inject(DeliveriesApi);
   readonly #exports = inject(RowsExport);
-  readonly #reading = inject(Reading);
   protected readonly counted = counted;
   protected readonly waitsForDecision = waitsForDecision;
   protected readonly states: readonly Choice[] = states.map((value) => ({
@@ -89,7 +88,7 @@ export class DeliveryList {
   }
 
   protected stands({ state, sentAt, attempt }: Delivery): string {
-    if (sentAt) return `sent ${instantText(sentAt, this.#reading.locale(), this.#reading.zone())}`;
+    if (sentAt) return 'sent';
     const tries = attempt > 1 ? `, tried ${attempt} times` : '';
     return deliveryWords(state) + tries;
   }

@@ -1,12 +1,13 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import { DayPipe, EmptyNote, LabelPipe, SectionHead, TicketCard, WordPipe } from '@lib/ui';
+import { ticketName } from '@lib/domain/words/document-name';
+import { DayPipe, EmptyNote, labelFor, SectionHead, TicketCard, wordFor } from '@lib/ui';
 import { type Machine } from './machines-api';
 
 /** What was done to a machine, visit by visit, newest first. */
 @Component({
   selector: 'tw-machine-history',
-  imports: [DayPipe, EmptyNote, LabelPipe, RouterLink, SectionHead, TicketCard, WordPipe],
+  imports: [DayPipe, EmptyNote, RouterLink, SectionHead, TicketCard],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <tw-section-head heading="History" />
@@ -15,7 +16,9 @@ import { type Machine } from './machines-api';
         <div stub>
           <span class="tw-soft">{{ job.ticketNumber ? 'Ticket' : 'Visit' }}</span>
           <strong class="tw-figures">
-            {{ job.ticketNumber ?? job.visitNumber }}/{{ job.position }}
+            {{ job.ticketNumber ? ticketName(job.ticketNumber) : job.visitNumber }}/{{
+              job.position
+            }}
           </strong>
           <span class="tw-soft">{{ job.on | twDay }}</span>
         </div>
@@ -25,13 +28,7 @@ import { type Machine } from './machines-api';
           }}</a>
         </p>
         <p class="tw-soft">
-          {{ job.action }}
-          @if (job.cause) {
-            <span>{{ job.cause | twLabel }}.</span>
-          }
-          @if (job.result) {
-            <span>Left as {{ job.result | twWord }}.</span>
-          }
+          {{ done(job) }}
         </p>
       </tw-ticket>
     } @empty {
@@ -57,4 +54,14 @@ import { type Machine } from './machines-api';
 })
 export class MachineHistory {
   readonly jobs = input.required<Machine['jobs']>();
+  protected readonly ticketName = ticketName;
+
+  /** "Pump fitted, full cycle run. Wear. Left as put right." */
+  protected done({ action, cause, result }: Machine['jobs'][number]): string {
+    const parts = [action, cause && labelFor(cause), result && `Left as ${wordFor(result)}`];
+    return parts
+      .filter((part) => !!part)
+      .map((part) => `${part}.`)
+      .join(' ');
+  }
 }

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { type VisitState } from '@lib/contracts/web';
+import { ticketName } from '@lib/domain/words/document-name';
 import { ChoiceFilter, DayPipe, labelFor, ListShell, listState, PageHead, Reading } from '@lib/ui';
 import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
@@ -50,6 +51,7 @@ export class VisitList {
   protected readonly mayPlan = computed(() => this.session.mayChange('visits.plan'));
   protected readonly stateWords = stateWords;
   protected readonly workWords = workWords;
+  protected readonly ticketName = ticketName;
 
   constructor() {
     reloadOn(this.visits, 'visit', 'ticket');

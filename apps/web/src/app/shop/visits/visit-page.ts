@@ -10,6 +10,7 @@ import {
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
+import { ticketName } from '@lib/domain/words/document-name';
 import {
   ClockPipe,
   counted,
@@ -92,6 +93,7 @@ export class VisitPage implements HasChanges {
   protected readonly busy = signal(false);
   protected readonly counted = counted;
   protected readonly stateWords = stateWords;
+  protected readonly ticketName = ticketName;
   /** Nobody has begun: it can be moved, confirmed, cancelled. */
   protected readonly planned = computed(() => {
     const state = this.visit.hasValue() ? this.visit.value().state : undefined;
