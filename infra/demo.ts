@@ -1,6 +1,7 @@
 import { Advice, progress } from './bootstrap/progress.cjs';
 import { buildServer } from './build/server';
 import { dataFolder, wantedPort } from './paths';
+import { checkArguments } from './stack/demo-arguments';
 import { endLeftOvers, runningStart } from './stack/run-file';
 import { seed } from './stack/fill';
 import { Stack } from './stack/stack';
@@ -10,6 +11,7 @@ import { Stack } from './stack/stack';
  * there. With the application running it works on that one's database; else it starts it for this.
  */
 export async function main(args: readonly string[]): Promise<void> {
+  checkArguments(args);
   const dataDir = dataFolder();
   await buildServer(progress);
   if (runningStart(dataDir) !== undefined) {
