@@ -2,6 +2,7 @@ import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { chromium, type Browser, type Page } from '@playwright/test';
 import sharp from 'sharp';
+import { layOutOverview } from './overview';
 import config from './playwright.config';
 import { run } from './support/run';
 import { desktop, phone } from './support/screens';
@@ -20,69 +21,107 @@ interface Picture {
   then?: (page: Page) => Promise<void>;
 }
 
-const firstLink = (pattern: RegExp) => async (page: Page) => {
-  await page.getByRole('link', { name: pattern }).first().click();
+const openStore = async (page: Page) => {
+  await page.getByRole('link', { name: 'Foxglove Lane' }).click();
 };
 
-const [owner, tech, client, attendant] = (
-  ['shop_owner', 'tech', 'client_owner', 'attendant'] as const
-).map((role) => run.accounts.find((account) => account.role === role)?.email ?? '');
-const admin = run.accounts.find((account) => account.role === 'platform_admin')?.email ?? '';
+const openFirstRow = async (page: Page) => {
+  await page.getByRole('row').nth(1).getByRole('link').first().click();
+};
+
+/** The visits of the day are the headings below the day's own. */
+const openFirstVisit = async (page: Page) => {
+  await page.getByRole('heading', { level: 2 }).getByRole('link').first().click();
+};
+
+const accounts = (role: string) =>
+  run.accounts.filter((account) => account.role === role).map(({ email }) => email);
+const [owner = ''] = accounts('shop_owner');
+const [tech = ''] = accounts('tech');
+// The second one has something to pay.
+const client = accounts('client_owner')[1] ?? '';
+const [attendant = ''] = accounts('attendant');
+const [admin = ''] = accounts('platform_admin');
 
 const pictures: Picture[] = [
   {
-    name: 'overview',
-    as: owner ?? '',
+    name: 'shop-store',
+    as: owner,
     screen: 'desktop',
     scheme: 'light',
     path: '/shop/stores',
-    then: firstLink(/Foxglove Lane/),
+    then: openStore,
   },
-  { name: 'shop-today', as: owner ?? '', screen: 'desktop', scheme: 'light', path: '/shop/today' },
+  { name: 'shop-today', as: owner, screen: 'desktop', scheme: 'light', path: '/shop/today' },
   {
     name: 'shop-ruling',
-    as: owner ?? '',
+    as: owner,
     screen: 'desktop',
     scheme: 'light',
     path: '/shop/rulings',
-    then: async (page) => page.getByRole('row').nth(1).getByRole('link').first().click(),
+    then: openFirstRow,
   },
   {
     name: 'shop-ticket',
-    as: owner ?? '',
+    as: owner,
     screen: 'desktop',
     scheme: 'light',
     path: '/shop/tickets',
-    then: async (page) => page.getByRole('row').nth(1).getByRole('link').first().click(),
+    then: openFirstRow,
+  },
+  {
+    name: 'shop-day-sheet',
+    as: owner,
+    screen: 'desktop',
+    scheme: 'light',
+    path: '/shop/day-sheet',
   },
   {
     name: 'shop-month-close',
-    as: owner ?? '',
+    as: owner,
     screen: 'desktop',
     scheme: 'dark',
     path: '/shop/month-close',
   },
-  { name: 'field-day', as: tech ?? '', screen: 'phone', scheme: 'light', path: '/field/day' },
+  { name: 'field-day', as: tech, screen: 'phone', scheme: 'light', path: '/field/day' },
   {
     name: 'field-visit',
-    as: tech ?? '',
+    as: tech,
     screen: 'phone',
     scheme: 'dark',
     path: '/field/day',
-    then: async (page) => page.getByRole('main').getByRole('link').first().click(),
+    then: openFirstVisit,
   },
-  { name: 'client-home', as: client ?? '', screen: 'phone', scheme: 'light', path: '/client/home' },
+  {
+    name: 'field-job',
+    as: tech,
+    screen: 'phone',
+    scheme: 'light',
+    path: '/field/day',
+    then: async (page) => {
+      await openFirstVisit(page);
+      await page.getByRole('button', { name: 'I am here' }).click();
+      await page
+        .getByRole('button', { name: /^Work on / })
+        .first()
+        .click();
+      await page.waitForURL(/\/jobs\//);
+    },
+  },
+  { name: 'client-home', as: client, screen: 'phone', scheme: 'light', path: '/client/home' },
   {
     name: 'client-statement',
-    as: client ?? '',
+    as: client,
     screen: 'desktop',
     scheme: 'light',
     path: '/client/statements',
-    then: async (page) => page.getByRole('row').nth(1).getByRole('link').first().click(),
+    then: async (page) => {
+      await page.getByRole('row', { name: 'Quay 9' }).first().getByRole('link').click();
+    },
   },
   {
     name: 'client-attendant',
-    as: attendant ?? '',
+    as: attendant,
     screen: 'phone',
     scheme: 'light',
     path: '/client/home',
@@ -105,6 +144,8 @@ async function take(browser: Browser, picture: Picture): Promise<void> {
     colorScheme: picture.scheme,
     locale: 'en-US',
     reducedMotion: 'reduce',
+    // What it keeps for the next visit of a page is of no use to a picture.
+    serviceWorkers: 'block',
   });
   try {
     const page = await context.newPage();
@@ -115,6 +156,7 @@ async function take(browser: Browser, picture: Picture): Promise<void> {
     if (picture.then) {
       await picture.then(page);
       await page.waitForURL((url) => url.pathname !== picture.path);
+      await page.mouse.move(0, 0);
       await settled(page);
     }
     const png = await page.screenshot();
@@ -135,13 +177,22 @@ async function signIn(page: Page, email: string): Promise<void> {
   await page.waitForURL((url) => !url.pathname.includes('sign-in'));
 }
 
-/** Until the page has its heading and nothing says that it is loading. */
+/** Until the page has its heading, waits for nothing, and has stood still for a while. */
 async function settled(page: Page): Promise<void> {
   await page.getByRole('heading', { level: 1 }).first().waitFor();
-  await page
-    .getByText(/^\s*Loading\s*$/)
-    .first()
-    .waitFor({ state: 'hidden' });
+  await page.waitForFunction(
+    () =>
+      !/^\s*Loading\b/m.test(document.body.innerText) &&
+      !document.querySelector('.skeleton, [aria-busy="true"]') &&
+      Array.from(document.images).every((image) => image.complete),
+  );
+  let before: string;
+  let now = await page.content();
+  do {
+    before = now;
+    await page.waitForTimeout(400);
+    now = await page.content();
+  } while (now !== before);
 }
 
 async function main(): Promise<void> {
@@ -149,6 +200,8 @@ async function main(): Promise<void> {
   const browser = await chromium.launch(config.use?.launchOptions);
   try {
     for (const picture of pictures) await take(browser, picture);
+    await layOutOverview(folder);
+    console.log('overview.png');
   } finally {
     await browser.close();
   }
