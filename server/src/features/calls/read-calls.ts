@@ -7,7 +7,7 @@ import { page, searched } from '../../core/lists/keyset';
 import { found } from '../../core/problems/problem';
 import { shopFacts } from '../../core/shop-facts';
 import { dayName } from '../statements/document-names';
-import { ownStore } from '../stores/own-store';
+import { ownClient, ownStore } from '../stores/own-store';
 import { callProgress } from './call-progress';
 import { callColumns, callFrom, type CallRow, presentCall } from './call-row';
 
@@ -19,6 +19,7 @@ export function listCalls(
     const bind: Bind = { shopId: context.shopId };
     const where = [
       'k.shop_id = $shopId',
+      ...ownClient(context, 'k.client_id', bind),
       ...ownStore(context, 'k.store_id', bind),
       ...searched(query.q, ['k.number::text', 'k.words', 's.name', 'm.bay'], bind),
     ];

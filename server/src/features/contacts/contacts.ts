@@ -10,6 +10,7 @@ import { shown } from '../../core/lists/shown';
 import { announce } from '../../core/live/live';
 import { found, invalid } from '../../core/problems/problem';
 import { orStale } from '../../core/versions';
+import { ownClient } from '../stores/own-store';
 
 type Contact = AnswerOf<'contacts.create'>;
 
@@ -35,6 +36,7 @@ export function listContacts(
     const bind: Bind = { shopId: context.shopId };
     const where = [
       'p.shop_id = $shopId',
+      ...ownClient(context, 'p.client_id', bind),
       ...shown(query.show, 'p.ended_at'),
       ...searched(query.q, ['p.name', 'p.email', 'p.phone', 's.name', 'c.name'], bind),
     ];

@@ -2,6 +2,7 @@ import { type Context } from '../../core/context';
 import { type Bind, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
 import { page, searched } from '../../core/lists/keyset';
+import { ownClient } from '../stores/own-store';
 
 type Round = AnswerOf<'rounds.list'>['items'][number];
 
@@ -19,7 +20,11 @@ export function listRounds(
 ): Promise<AnswerOf<'rounds.list'>> {
   return withTenant(context, () => {
     const bind: Bind = { shopId: context.shopId };
-    const where = ['r.shop_id = $shopId', ...searched(query.q, ['s.name', 'k.name'], bind)];
+    const where = [
+      'r.shop_id = $shopId',
+      ...ownClient(context, 'r.client_id', bind),
+      ...searched(query.q, ['s.name', 'k.name'], bind),
+    ];
     const filter = (value: string | undefined, name: string, condition: string) => {
       if (value === undefined) return;
       bind[name] = value;

@@ -1,9 +1,8 @@
-import { once } from 'node:events';
 import { csvRow, csvStart } from '@lib/domain';
-import { type Response } from 'express';
 import { type Context } from '../../core/context';
 import { rows, withTenant } from '../../core/database/tenancy';
 import { type InputOf, RawReply } from '../../core/http/route';
+import { sendPiece } from '../../core/http/send-piece';
 import { shown } from '../../core/lists/shown';
 import { shopFacts, type ShopFacts } from '../../core/shop-facts';
 import { tradeDayNow } from '../settings/trade-day';
@@ -33,11 +32,11 @@ export async function exportList(
       .status(200)
       .set('Content-Disposition', `attachment; filename="${kind}-${today}.csv"`)
       .type('text/csv; charset=utf-8');
-    await send(response, csvStart + csvRow(list.headers));
+    await sendPiece(response, csvStart + csvRow(list.headers));
     for (let found = first; ;) {
-      await send(response, text(list, found, shop));
+      const goesOn = await sendPiece(response, text(list, found, shop));
       const last = found.at(-1);
-      if (found.length < atOnce || !last || response.destroyed) break;
+      if (found.length < atOnce || !last || !goesOn) break;
       found = await nextRows(context, list, show, last);
     }
     response.end();
@@ -70,10 +69,4 @@ function nextRows(
 
 function text(list: ExportedList, found: Keyed[], shop: ShopFacts): string {
   return found.map((row) => csvRow(cellsOf(list, row, shop))).join('');
-}
-
-/** Waits while the reader is slower than the database; a reader who left ends the waiting. */
-async function send(response: Response, chunk: string): Promise<void> {
-  if (response.destroyed || response.write(chunk)) return;
-  await Promise.race([once(response, 'drain'), once(response, 'close')]);
 }

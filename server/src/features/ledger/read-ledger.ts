@@ -12,6 +12,7 @@ import {
 import { type Context } from '../../core/context';
 import { type Bind, rows, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf, RawReply } from '../../core/http/route';
+import { sendPiece } from '../../core/http/send-piece';
 import { page } from '../../core/lists/keyset';
 import { shopFacts } from '../../core/shop-facts';
 
@@ -129,9 +130,10 @@ export async function journalFile(
       if (documents.length === 0) break;
       const names = new Map(found.map((line) => [line.storeId, line.storeName]));
       const storeName = (id: string) => names.get(id) ?? id;
-      response.write(`${journalText(documents, { currency: shop.currency, storeName })}\n`);
+      const text = journalText(documents, { currency: shop.currency, storeName });
+      const goesOn = await sendPiece(response, `${text}\n`);
       const last = found.at(-1);
-      if (!last || documents.length < chunk) break;
+      if (!last || documents.length < chunk || !goesOn) break;
       after = [last.date, last.id];
     }
     response.end();

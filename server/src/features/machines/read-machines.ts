@@ -3,7 +3,7 @@ import { type Bind, row, rows, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
 import { page, searched, type SortKey } from '../../core/lists/keyset';
 import { found } from '../../core/problems/problem';
-import { ownStore } from '../stores/own-store';
+import { ownClient, ownStore } from '../stores/own-store';
 import {
   machineColumns,
   machineFrom,
@@ -32,6 +32,7 @@ export function listMachines(context: Context, query: Query): Promise<AnswerOf<'
         from: machineSummaryFrom,
         where: [
           'm.shop_id = $shopId',
+          ...ownClient(context, 'm.client_id', bind),
           ...ownStore(context, 'm.store_id', bind),
           ...filters(query, bind),
           ...searched(

@@ -2,6 +2,7 @@ import { type Context } from '../../core/context';
 import { type Bind, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
 import { page, searched } from '../../core/lists/keyset';
+import { ownClient } from '../stores/own-store';
 import {
   paymentColumns,
   paymentFrom,
@@ -18,7 +19,11 @@ export function listPayments(
 ): Promise<AnswerOf<'payments.list'>> {
   return withTenant(context, () => {
     const bind: Bind = { shopId: context.shopId };
-    const where = ['p.shop_id = $shopId', ...searched(query.q, ['s.name', 'c.name'], bind)];
+    const where = [
+      'p.shop_id = $shopId',
+      ...ownClient(context, 'p.client_id', bind),
+      ...searched(query.q, ['s.name', 'c.name'], bind),
+    ];
     const filter = (value: string | undefined, name: string, condition: string) => {
       if (value === undefined) return;
       bind[name] = value;
@@ -29,8 +34,9 @@ export function listPayments(
     filter(
       query.statementId,
       'statementId',
-      `(p.statement_id = $statementId or exists (select 1 from allocations a
-         where a.shop_id = p.shop_id and a.payment_id = p.id and a.statement_id = $statementId))`,
+      `p.id in (select id from payments where shop_id = $shopId and statement_id = $statementId
+         union select payment_id from allocations
+         where shop_id = $shopId and statement_id = $statementId)`,
     );
     filter(query.method, 'method', 'p.method = $method');
     filter(query.state, 'state', 'p.state = $state');

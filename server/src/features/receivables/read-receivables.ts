@@ -4,6 +4,7 @@ import { type Bind, row, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
 import { page, searched, type SortKey } from '../../core/lists/keyset';
 import { shopFacts } from '../../core/shop-facts';
+import { ownClient } from '../stores/own-store';
 
 type Balance = AnswerOf<'balances.list'>['items'][number];
 type AgeingRow = AnswerOf<'receivables.list'>['items'][number];
@@ -21,6 +22,7 @@ export function listBalances(
     const where = [
       's.shop_id = $shopId',
       's.ended_at is null',
+      ...ownClient(context, 's.client_id', bind),
       ...searched(query.q, ['s.name', 's.number'], bind),
     ];
     if (query.clientId) where.push('s.client_id = $clientId');

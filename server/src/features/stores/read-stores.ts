@@ -5,7 +5,7 @@ import { page, searched } from '../../core/lists/keyset';
 import { shown } from '../../core/lists/shown';
 import { found } from '../../core/problems/problem';
 import { conditionsOf } from '../machines/read-conditions';
-import { ownStore, refuseOtherStore } from './own-store';
+import { ownClient, ownStore, refuseOtherStore } from './own-store';
 import {
   machineCountsOf,
   presentStore,
@@ -23,6 +23,7 @@ export function listStores(
     const bind: Bind = { shopId: context.shopId };
     const where = [
       's.shop_id = $shopId',
+      ...ownClient(context, 's.client_id', bind),
       ...ownStore(context, 's.id', bind),
       ...shown(query.show, 's.ended_at'),
       ...searched(query.q, ['s.name', 's.number', 's.address', 'c.name'], bind),

@@ -4,6 +4,7 @@ import { type AnswerOf, type InputOf } from '../../core/http/route';
 import { filtered } from '../../core/lists/filtered';
 import { page, searched } from '../../core/lists/keyset';
 import { found } from '../../core/problems/problem';
+import { ownClient } from '../stores/own-store';
 import { absorbedOf, jobsOfTicket, linesOfTicket } from './read-lines';
 import {
   presentTicket,
@@ -21,6 +22,7 @@ export function listTickets(
     const bind: Bind = { shopId: context.shopId };
     const where = [
       't.shop_id = $shopId',
+      ...ownClient(context, 't.client_id', bind),
       ...filtered(query, { clientId: 't.client_id', storeId: 't.store_id' }, bind),
       ...searched(query.q, ['t.number::text', 's.name', 'c.name'], bind),
     ];

@@ -4,7 +4,7 @@ import { type Bind } from '../../core/database/tenancy';
 import { instantOrNull } from '../../core/database/times';
 import { type AnswerOf } from '../../core/http/route';
 import { windowOf } from '../calls/call-row';
-import { ownStore } from '../stores/own-store';
+import { ownClient, ownStore } from '../stores/own-store';
 
 export type VisitItem = AnswerOf<'visits.list'>['items'][number];
 
@@ -64,7 +64,10 @@ export const visitSelect = `select ${visitColumns} from ${visitFrom} ${visitMore
 
 /** Which visits a person may see: an attendant those of the store, a tech their own and unplaced. */
 export function ownVisits(context: Context, bind: Bind): string[] {
-  const own = ownStore(context, 'v.store_id', bind);
+  const own = [
+    ...ownClient(context, 'v.client_id', bind),
+    ...ownStore(context, 'v.store_id', bind),
+  ];
   if (context.role !== 'tech') return own;
   bind.ownMembershipId = context.membershipId;
   return [...own, '(v.tech_membership_id is null or v.tech_membership_id = $ownMembershipId)'];
