@@ -110,6 +110,9 @@ interface JournalRow {
   amount: number;
 }
 
+/** Where a piece ended. A ticket and what the shop bore of it share an id and a day. */
+type LastDocument = Pick<JournalRow, 'date' | 'id' | 'kind'>;
+
 /** Documents read at once: a year's books are never in memory whole. */
 const chunk = 2000;
 
@@ -124,7 +127,7 @@ export async function journalFile(
       'Content-Type': 'text/plain; charset=utf-8',
       'Content-Disposition': 'attachment; filename="journal.txt"',
     });
-    for (let after: [string, string] | undefined; ;) {
+    for (let after: LastDocument | undefined; ;) {
       const found = await withTenant(context, () => journalRows(context, span, after));
       const documents = documentsOf(found);
       if (documents.length === 0) break;
@@ -134,7 +137,7 @@ export async function journalFile(
       const goesOn = await sendPiece(response, `${text}\n`);
       const last = found.at(-1);
       if (!last || documents.length < chunk || !goesOn) break;
-      after = [last.date, last.id];
+      after = last;
     }
     response.end();
   });
@@ -143,7 +146,7 @@ export async function journalFile(
 function journalRows(
   context: Context,
   span: InputOf<'ledger.journal'>['query'],
-  after: [string, string] | undefined,
+  after: LastDocument | undefined,
 ): Promise<JournalRow[]> {
   return rows<JournalRow>(
     `select d.document_id as id, d.document_kind as kind, d.posted_on as date,
@@ -161,19 +164,21 @@ function journalRows(
        where shop_id = $shopId
          and ($from::date is null or posted_on >= $from::date)
          and ($to::date is null or posted_on <= $to::date)
-         and ($afterDay::date is null or (posted_on, document_id) > ($afterDay::date, $afterId::uuid))
-       order by posted_on, document_id limit ${chunk}
+         and ($afterDay::date is null or (posted_on, document_id, document_kind)
+           > ($afterDay::date, $afterId::uuid, $afterKind))
+       order by posted_on, document_id, document_kind limit ${chunk}
      ) d
      join entries e on e.shop_id = $shopId and e.document_kind = d.document_kind
        and e.document_id = d.document_id
      left join stores s on s.shop_id = $shopId and s.id = e.store_id
-     order by d.posted_on, d.document_id, e.line_no`,
+     order by d.posted_on, d.document_id, d.document_kind, e.line_no`,
     {
       shopId: context.shopId,
       from: span.from ?? null,
       to: span.to ?? null,
-      afterDay: after?.[0] ?? null,
-      afterId: after?.[1] ?? null,
+      afterDay: after?.date ?? null,
+      afterId: after?.id ?? null,
+      afterKind: after?.kind ?? null,
     },
   );
 }
