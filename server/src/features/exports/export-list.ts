@@ -9,7 +9,7 @@ import { tradeDayNow } from '../settings/trade-day';
 import { cellsOf, type ExportedList, exportedLists } from './lists';
 
 type Show = InputOf<'exports.download'>['query']['show'];
-type Keyed = Parameters<typeof cellsOf>[1] & { sort_value: string; sort_id: string };
+type Keyed = Parameters<typeof cellsOf>[1] & { sort_values: string[]; sort_id: string };
 
 /** Rows read at once: one short transaction each, so a slow reader holds nothing open. */
 const atOnce = 1000;
@@ -49,22 +49,31 @@ function nextRows(
   show: Show,
   after: Keyed | undefined,
 ): Promise<Keyed[]> {
-  const { column, type } = list.sort;
+  const order = [...list.sort, list.id].join(', ');
   return withTenant(context, () =>
     rows<Keyed>(
-      `${list.select.replace(/^select/, `select ${column}::text as sort_value, ${list.id} as sort_id,`)}
+      `${list.select.replace(/^select/, `select array[${list.sort.join(', ')}] as sort_values, ${list.id} as sort_id,`)}
        where ${[
          `${list.shopColumn} = $shopId`,
          ...shown(show, list.ended),
-         ...(after ? [`(${column}, ${list.id}) > ($value::${type}, $id::uuid)`] : []),
+         ...(after ? isAfter(list) : []),
        ].join(' and ')}
-       order by ${column}, ${list.id} limit ${atOnce}`,
+       order by ${order} limit ${atOnce}`,
       {
         shopId: context.shopId,
-        ...(after ? { value: after.sort_value, id: after.sort_id } : {}),
+        ...(after ? { values: after.sort_values, id: after.sort_id } : {}),
       },
     ),
   );
+}
+
+/** The first column is compared by itself too: an index of its table alone can use that. */
+function isAfter({ sort, id }: ExportedList): string[] {
+  const values = sort.map((_, at) => `($values::text[])[${at + 1}]`);
+  return [
+    `${sort[0]} >= ${values[0]}`,
+    `(${[...sort, id].join(', ')}) > (${[...values, '$id::uuid'].join(', ')})`,
+  ];
 }
 
 function text(list: ExportedList, found: Keyed[], shop: ShopFacts): string {

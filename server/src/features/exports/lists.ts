@@ -1,5 +1,4 @@
 import { decimalFromAmount, tradeDayOf } from '@lib/domain';
-import { type SortKey } from '../../core/lists/keyset';
 import { type ShopFacts } from '../../core/shop-facts';
 import { spoken } from '../imports/cells';
 import { columnsOf } from '../imports/columns';
@@ -15,7 +14,8 @@ export interface ExportedList {
   shopColumn: string;
   /** Not null for rows that ended. */
   ended: string;
-  sort: SortKey;
+  /** Columns of text the rows are ordered by; the id makes the order total. */
+  sort: string[];
   id: string;
   /** How a value is written where its kind does not say so. */
   write?: Record<string, (value: string | number, shop: ShopFacts) => string>;
@@ -64,7 +64,7 @@ const clients: ExportedList = {
     from clients c`,
   shopColumn: 'c.shop_id',
   ended: 'c.ended_at',
-  sort: { column: 'c.number', type: 'text' },
+  sort: ['c.number'],
   id: 'c.id',
 };
 
@@ -81,7 +81,7 @@ const stores: ExportedList = {
     ) p on true`,
   shopColumn: 's.shop_id',
   ended: 's.ended_at',
-  sort: { column: 's.number', type: 'text' },
+  sort: ['s.number'],
   id: 's.id',
 };
 
@@ -117,7 +117,7 @@ const contacts: ExportedList = {
     left join stores s on s.shop_id = p.shop_id and s.id = p.store_id`,
   shopColumn: 'p.shop_id',
   ended: 'p.ended_at',
-  sort: { column: 'p.name', type: 'text' },
+  sort: ['p.name'],
   id: 'p.id',
 };
 
@@ -133,7 +133,7 @@ const machines: ExportedList = {
   shopColumn: 'm.shop_id',
   ended: "nullif(m.state = 'retired' or s.ended_at is not null, false)",
   // Store by store, as somebody walking through would note them.
-  sort: { column: "(s.number || '/' || m.bay)", type: 'text' },
+  sort: ['s.number', 'm.bay'],
   id: 'm.id',
   write: {
     kind: word,
@@ -153,7 +153,7 @@ const parts: ExportedList = {
     from parts p left join parts next on next.shop_id = p.shop_id and next.id = p.superseded_by`,
   shopColumn: 'p.shop_id',
   ended: 'p.ended_at',
-  sort: { column: 'p.number', type: 'text' },
+  sort: ['p.number'],
   id: 'p.id',
   write: { unitCost: money, fixedPrice: money },
 };
