@@ -25,6 +25,12 @@ export const queues = {
   'warranty-absorb': { retryLimit: 5, retryDelay: 5, retryBackoff: true, expireInSeconds: 120 },
 } as const satisfies Record<string, PgBoss.RetryOptions & PgBoss.ExpirationOptions>;
 
+/**
+ * Through this queue of its own pg-boss rings what is scheduled. It would make it when a worker
+ * starts, but a worker's role may not, and pg-boss then says nothing and never rings.
+ */
+const alarmQueue = '__pgboss__send-it';
+
 export type QueueName = keyof typeof queues;
 
 /** Creates the queue tables and the queues as their owner, and lets the working roles use them. */
@@ -43,6 +49,7 @@ export async function createQueues(ownerUrl: string): Promise<void> {
       await boss.createQueue(name, { name, ...options });
       await boss.updateQueue(name, { name, ...options });
     }
+    await boss.createQueue(alarmQueue);
     const db = boss.getDb();
     for (const role of ['tw_app', 'tw_platform']) {
       await db.executeSql(`grant usage, create on schema pgboss to ${role}`, []);
