@@ -34,14 +34,4 @@ export class CallsApi {
       ifMatch: version,
     });
   }
-
-  /** With an id of our own, so that sending it again after no answer adds it once. */
-  addPhoto(callId: string, id: string, file: File) {
-    const upload = new FormData();
-    upload.set('id', id);
-    upload.set('ownerKind', 'call');
-    upload.set('ownerId', callId);
-    upload.set('file', file);
-    return this.#api.call('files.add', { body: { ownerKind: 'call', ownerId: callId }, upload });
-  }
 }

@@ -1,5 +1,8 @@
 import { inject, Injectable } from '@angular/core';
+import { type BodyOf } from '@lib/contracts/web';
 import { Api } from '../../core/api/api';
+
+type PhotoOwner = Pick<BodyOf<'files.add'>, 'ownerKind' | 'ownerId'>;
 
 @Injectable({ providedIn: 'root' })
 export class PhotosApi {
@@ -10,15 +13,12 @@ export class PhotosApi {
   }
 
   /** With an id of our own, so that sending it again after no answer adds it once. */
-  add(storeId: string, id: string, file: File) {
+  add({ ownerKind, ownerId }: PhotoOwner, id: string, file: File) {
     const upload = new FormData();
     upload.set('id', id);
-    upload.set('ownerKind', 'store');
-    upload.set('ownerId', storeId);
+    upload.set('ownerKind', ownerKind);
+    upload.set('ownerId', ownerId);
     upload.set('file', file);
-    return this.#api.call('files.add', {
-      body: { ownerKind: 'store', ownerId: storeId },
-      upload,
-    });
+    return this.#api.call('files.add', { body: { ownerKind, ownerId }, upload });
   }
 }
