@@ -1,6 +1,6 @@
 /**
- * Writes the two tables the browser takes from the contracts: where each operation is, and what its
- * form fields must hold. `npm run contracts`; a spec fails while they are stale.
+ * Writes what the browser takes from the contracts: where each operation is, what its form fields
+ * must hold, and the values of each enumeration. `npm run contracts`; a spec fails while it is stale.
  */
 import { mkdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import * as enums from './enums';
 import { type Operation, storesAnswer } from './operation';
 import { operations } from './operations';
 
@@ -20,7 +21,24 @@ interface JsonSchema {
 /** The text of each generated file by its name. */
 export function webTables(): Record<string, string> {
   const all = Object.values(operations) as Operation[];
-  return { 'routes.ts': routesTable(all), 'form-rules.ts': rulesTable(all) };
+  return {
+    'routes.ts': routesTable(all),
+    'form-rules.ts': rulesTable(all),
+    'values.ts': valueLists(),
+  };
+}
+
+/** The values of each enumeration, under its name in the plural. */
+function valueLists(): string {
+  const lists = Object.entries(enums).map(
+    ([name, { options }]) =>
+      `export const ${plural(name)} = ['${options.join("', '")}'] as const;\n`,
+  );
+  return `${banner}\n${lists.sort().join('')}`;
+}
+
+function plural(name: string): string {
+  return name.endsWith('y') ? `${name.slice(0, -1)}ies` : `${name}s`;
 }
 
 function routesTable(all: Operation[]): string {

@@ -1,5 +1,5 @@
 /**
- * What the browser takes from the contracts: types, which cost nothing, and two generated tables.
+ * What the browser takes from the contracts: types, which cost nothing, and generated tables.
  * No zod, which would weigh more than a page.
  */
 import type { z } from 'zod';

@@ -1,5 +1,5 @@
 import { FormControl, FormGroup, Validators } from '@angular/forms';
-import { type Cause, type FindingCode, type WarrantyMark } from '@lib/contracts/web';
+import { causes, findingCodes, warrantyMarks } from '@lib/contracts/generated/values';
 import { labelFor, wordFor } from '@lib/ui';
 import { type JobValues } from './job-values';
 
@@ -40,39 +40,16 @@ export function jobForm({ ...values }: JobValues): JobForm {
   });
 }
 
-const codes: readonly FindingCode[] = [
-  'blocked',
-  'broken',
-  'burnt',
-  'worn',
-  'loose',
-  'leaking',
-  'seized',
-  'shorted',
-  'misaligned',
-  'soiled',
-  'missing',
-  'misadjusted',
-  'other',
-];
 /** Shown before the others are asked for. */
 export const commonCodes = 6;
-export const codeChoices = codes.map((value) => ({ value, label: wordFor(value) }));
+export const codeChoices = findingCodes.map((value) => ({ value, label: wordFor(value) }));
 
-const causes: readonly Cause[] = [
-  'wear',
-  'age',
-  'misuse',
-  'vandalism',
-  'supply',
-  'installation',
-  'defective_part',
-  'shop_error',
-];
-export const causeChoices = causes.map((value) => ({ value, label: wordFor(value) }));
+/** Where nothing was found, the finding says so: no cause is asked for. */
+export const causeChoices = causes
+  .filter((value) => value !== 'nothing_found')
+  .map((value) => ({ value, label: wordFor(value) }));
 
-const marks: readonly WarrantyMark[] = ['none', 'shop_warranty', 'own_mistake'];
-export const markChoices = marks.map((value) => ({
+export const markChoices = warrantyMarks.map((value) => ({
   value,
   label: value === 'none' ? 'No' : labelFor(value),
 }));

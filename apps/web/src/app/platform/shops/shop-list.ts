@@ -1,12 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { RouterLink } from '@angular/router';
+import { subscriptionStates } from '@lib/contracts/generated/values';
 import { type SubscriptionState } from '@lib/contracts/web';
 import { ChoiceFilter, InstantPipe, labelFor, ListShell, listState, PageHead } from '@lib/ui';
 import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { RowsExport } from '../../core/lists/rows-export';
 import { PlatformApi } from '../platform-api';
-import { needsLook, stateWords, subscriptionStates } from './shop-words';
+import { needsLook, stateWords } from './shop-words';
 
 /** Every shop with its plan and how its subscription stands; nothing of its business. */
 @Component({

@@ -2,14 +2,6 @@ import { type SubscriptionState } from '@lib/contracts/web';
 import { wordFor } from '@lib/ui/words/words';
 import { type Plan, type Shop } from '../platform-api';
 
-export const subscriptionStates: readonly SubscriptionState[] = [
-  'trialing',
-  'active',
-  'past_due',
-  'paused',
-  'canceled',
-];
-
 const words: Record<SubscriptionState, string> = {
   trialing: 'on trial',
   active: 'active',

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { deliveryStates } from '@lib/contracts/generated/values';
 import { type DeliveryState } from '@lib/contracts/web';
 import {
   ChoiceFilter,
@@ -20,8 +21,6 @@ import { RowsExport } from '../../core/lists/rows-export';
 import { Messages } from '../../core/messages/messages';
 import { Session } from '../../core/session/session';
 import { type Mail, PlatformApi } from '../platform-api';
-
-const states: readonly DeliveryState[] = ['waiting', 'handing_over', 'sent', 'failed', 'uncertain'];
 
 /** The platform's own mails. Where the answer got lost, only a person may say what became of one. */
 @Component({
@@ -45,7 +44,7 @@ export class MailList {
   readonly #reading = inject(Reading);
   protected readonly session = inject(Session);
 
-  protected readonly states = states.map((value) => ({ value, label: labelFor(value) }));
+  protected readonly states = deliveryStates.map((value) => ({ value, label: labelFor(value) }));
   protected readonly mails = listState((ask) => this.#api.mails(ask), {
     sorts: { '-createdAt': 'Newest' },
     filters: filtersFromAddress({ state: '' as '' | DeliveryState }),

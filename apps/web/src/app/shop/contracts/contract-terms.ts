@@ -5,21 +5,12 @@ import {
   type NonNullableFormBuilder,
   Validators,
 } from '@angular/forms';
+import { machineKinds } from '@lib/contracts/generated/values';
 import { type MachineKind } from '@lib/contracts/web';
 import { type Choice, labelFor } from '@lib/ui';
 import { rulesFor } from '../../core/forms/rules-for';
 import { type Contract, type Terms } from './contracts-api';
 import { ruleOf, usualRule } from './rule-values';
-
-const machineKinds: readonly MachineKind[] = [
-  'top_loader',
-  'front_loader',
-  'dryer',
-  'stacked_pair',
-  'extractor',
-  'changer',
-  'heater',
-];
 
 export const kinds: readonly Choice[] = machineKinds.map((value) => ({
   value,

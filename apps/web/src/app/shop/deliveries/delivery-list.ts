@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
+import { deliveryStates } from '@lib/contracts/generated/values';
 import { type DeliveryState } from '@lib/contracts/web';
 import {
   Callout,
@@ -20,8 +21,6 @@ import { reloadOn } from '../../core/live/reload-on';
 import { DeliveriesApi, type Delivery } from './deliveries-api';
 import { DeliveryDecision } from './delivery-decision';
 import { deliveryWords, waitsForDecision } from './delivery-words';
-
-const states: readonly DeliveryState[] = ['waiting', 'handing_over', 'sent', 'failed', 'uncertain'];
 
 /** Every mail to the shop's clients; the ones that went wrong are decided here. */
 @Component({
@@ -61,7 +60,7 @@ export class DeliveryList {
   readonly #exports = inject(RowsExport);
   protected readonly counted = counted;
   protected readonly waitsForDecision = waitsForDecision;
-  protected readonly states: readonly Choice[] = states.map((value) => ({
+  protected readonly states: readonly Choice[] = deliveryStates.map((value) => ({
     value,
     label: labelFor(value),
   }));

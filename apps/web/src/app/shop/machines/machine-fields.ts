@@ -1,15 +1,14 @@
 import { FormControl, type ValidatorFn } from '@angular/forms';
+import { energies, machineKinds } from '@lib/contracts/generated/values';
 import { type Energy, type MachineKind } from '@lib/contracts/web';
 import { type Choice, labelFor } from '@lib/ui';
 import { rulesFor } from '../../core/forms/rules-for';
-import { machineKinds } from './machine-filters';
 
 export const kindChoices: readonly Choice<MachineKind>[] = machineKinds.map((value) => ({
   value,
   label: labelFor(value),
 }));
 
-const energies: readonly Energy[] = ['electric', 'gas', 'steam'];
 export const energyChoices: readonly Choice<Energy>[] = energies.map((value) => ({
   value,
   label: labelFor(value),

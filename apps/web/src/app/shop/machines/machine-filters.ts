@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { machineKinds, machineStates } from '@lib/contracts/generated/values';
 import { type MachineKind, type MachineState } from '@lib/contracts/web';
 import { labelFor } from '@lib/ui';
 
@@ -11,17 +12,6 @@ interface FilteredList {
   filters(): { readonly state: StateFilter; readonly kind: KindFilter };
   filterBy(name: 'state' | 'kind', value: string): void;
 }
-
-const states: readonly MachineState[] = ['up', 'degraded', 'down', 'locked_out', 'retired'];
-export const machineKinds: readonly MachineKind[] = [
-  'top_loader',
-  'front_loader',
-  'dryer',
-  'stacked_pair',
-  'extractor',
-  'changer',
-  'heater',
-];
 
 /** Narrows a list of machines by state and kind. */
 @Component({
@@ -62,7 +52,7 @@ export const machineKinds: readonly MachineKind[] = [
 })
 export class MachineFilters {
   readonly list = input.required<FilteredList>();
-  protected readonly states = states;
+  protected readonly states = machineStates;
   protected readonly kinds = machineKinds;
   protected readonly labelFor = labelFor;
 

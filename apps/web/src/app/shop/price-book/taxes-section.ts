@@ -1,11 +1,10 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { type LineKind } from '@lib/contracts/web';
+import { lineKinds } from '@lib/contracts/generated/values';
 import { type Choice, labelFor, PercentField, SelectField, TextField } from '@lib/ui';
 import { type BookForm, rateForm } from './book-form';
 import { type PriceBook } from './price-book-api';
 
-const kinds: readonly LineKind[] = ['trip', 'labour', 'access', 'part', 'fee', 'late_charge'];
 const roundings: readonly Choice<PriceBook['taxes']['rounding']>[] = [
   { value: 'invoice', label: 'On the ticket’s total' },
   { value: 'line', label: 'Line by line' },
@@ -59,7 +58,7 @@ export class TaxesSection {
   readonly validFrom = input.required<string>();
 
   protected readonly roundings = roundings;
-  protected readonly kindChoices: readonly Choice[] = kinds.map((value) => ({
+  protected readonly kindChoices: readonly Choice[] = lineKinds.map((value) => ({
     value,
     label: labelFor(value),
   }));

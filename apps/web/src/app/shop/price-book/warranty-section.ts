@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { rxResource } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { type Bearer, type Cause } from '@lib/contracts/web';
+import { bearers, causes } from '@lib/contracts/generated/values';
 import {
   AmountField,
   type Choice,
@@ -14,19 +14,6 @@ import {
 } from '@lib/ui';
 import { PartsApi } from '../parts/parts-api';
 import { type BookForm, categoryForm } from './book-form';
-
-const causes: readonly Cause[] = [
-  'wear',
-  'age',
-  'misuse',
-  'vandalism',
-  'supply',
-  'installation',
-  'defective_part',
-  'shop_error',
-  'nothing_found',
-];
-const bearers: readonly Bearer[] = ['store', 'shop', 'supplier', 'contract', 'goodwill'];
 
 /** What the shop promises, and what it wants to look at itself. */
 @Component({

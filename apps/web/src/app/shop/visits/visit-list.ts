@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
+import { visitStates } from '@lib/contracts/generated/values';
 import { type VisitState } from '@lib/contracts/web';
 import { ticketName } from '@lib/domain/words/document-name';
 import { ChoiceFilter, DayPipe, labelFor, ListShell, listState, PageHead, Reading } from '@lib/ui';
@@ -43,7 +44,7 @@ export class VisitList {
   protected readonly states = [
     { value: 'live', label: 'Still to do' },
     { value: 'unticketed', label: 'Not signed off' },
-    ...(['planned', 'confirmed', 'in_process', 'completed', 'cancelled'] as const).map((value) => ({
+    ...visitStates.map((value) => ({
       value,
       label: labelFor(value),
     })),
