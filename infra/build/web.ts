@@ -14,7 +14,7 @@ const sources = [
   'infra/build',
 ];
 
-export const webOutput = path.join(root, 'dist/web');
+const webOutput = path.join(root, 'dist/web');
 
 /** The Angular command line, run by the node that runs us. */
 export const angularCli = path.join(root, 'node_modules/@angular/cli/bin/ng.js');

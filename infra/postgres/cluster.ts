@@ -41,7 +41,7 @@ export interface Cluster {
   readonly exited: Promise<void>;
 }
 
-export function clusterFolderState(folder: string): ClusterState | undefined {
+function clusterFolderState(folder: string): ClusterState | undefined {
   return readState<ClusterState>(path.join(folder, 'cluster.json'));
 }
 
@@ -53,7 +53,7 @@ function runningPid(dataFolder: string): number | undefined {
 }
 
 /** A start that was killed may have left its server behind; ours is the only right one. */
-export async function stopLeftOver(folder: string): Promise<void> {
+async function stopLeftOver(folder: string): Promise<void> {
   const state = clusterFolderState(folder);
   const pid = state && runningPid(state.dataFolder);
   if (pid) await endProcess(pid, 'SIGINT', 30_000);

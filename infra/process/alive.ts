@@ -22,7 +22,7 @@ function isZombie(pid: number): boolean {
  * The command line of a process, to tell ours from a stranger's that was given the same number
  * later. Undefined where the system does not say (no /proc).
  */
-export function commandLine(pid: number): string | undefined {
+function commandLine(pid: number): string | undefined {
   if (!existsSync('/proc/self/cmdline')) return undefined;
   try {
     return readFileSync(`/proc/${pid}/cmdline`, 'utf8').replaceAll('\0', ' ');

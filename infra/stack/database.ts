@@ -11,7 +11,7 @@ import {
 } from '../postgres/databases';
 import { readState, writeState } from '../process/state-file';
 
-export const databaseName = 'tumblewright';
+const databaseName = 'tumblewright';
 
 export async function startPrivateDatabase(
   folder: string,

@@ -1,5 +1,5 @@
 import { createHmac } from 'node:crypto';
-import { type Books, platform, type Thing } from './books';
+import { type Books, type Thing } from './books';
 
 /** How events are handed over; tests set it to see what a receiver does. */
 export type WebhookMode = 'normal' | 'hold' | 'twice' | 'reversed' | 'badsignature';
@@ -150,9 +150,4 @@ export class Webhooks {
     const { created, id } = event;
     this.books.put(shelf, { id, object: shelf, created, waiting, event: waiting ? event : null });
   }
-}
-
-/** Events of all connected accounts and the platform's own, newest first. */
-export function eventsOf(books: Books, account: string): Thing[] {
-  return books.all(account || platform, 'event');
 }

@@ -1,3 +1,4 @@
+import { isTimeZone } from '@lib/domain';
 import { z } from 'zod';
 
 /** A trade day in the shop's time zone; days that do not exist are refused. */
@@ -21,20 +22,7 @@ export const version = z.int().min(1);
 export const currency = z
   .string()
   .regex(/^[A-Z]{3}$/, { error: 'is not a currency code (ISO 4217)' });
-export const zone = z
-  .string()
-  .max(64)
-  .refine(
-    (v) => {
-      try {
-        new Intl.DateTimeFormat('en', { timeZone: v });
-        return true;
-      } catch {
-        return false;
-      }
-    },
-    { error: 'is not a time zone' },
-  );
+export const zone = z.string().max(64).refine(isTimeZone, { error: 'is not a time zone' });
 export const locale = z
   .string()
   .regex(/^[a-z]{2,3}(-[A-Z]{2})?$/, { error: 'is not a language tag' });

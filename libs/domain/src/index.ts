@@ -4,7 +4,6 @@ export {
   type Month,
   type TimeOfDay,
   isIsoDate,
-  isMonth,
   isTimeOfDay,
   isTimeZone,
 } from './calendar/iso';

@@ -26,7 +26,7 @@ export interface Person {
 let hash: string | undefined;
 
 /** `Imre Kovalik` of `Brackwater ...` signs in as imre.kovalik@brackwater.example. */
-export function addressOf(name: string, shopName: string): string {
+function addressOf(name: string, shopName: string): string {
   const plain = (words: string) =>
     words
       .normalize('NFD')

@@ -244,7 +244,7 @@ export const brackwater: ShopPlan = {
   ],
 };
 
-export const lindental: ShopPlan = {
+const lindental: ShopPlan = {
   name: 'Hausgerätewerkstatt Lindental',
   zone: 'Europe/Vienna',
   currency: 'EUR',

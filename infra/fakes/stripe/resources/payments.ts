@@ -247,7 +247,7 @@ function capture(call: Call): Thing {
   return done;
 }
 
-export function cancelIntent(call: Call, intent: Thing, reason: string | null): Thing {
+function cancelIntent(call: Call, intent: Thing, reason: string | null): Thing {
   if (['succeeded', 'canceled'].includes(String(intent.status))) throw unexpected(intent, 'cancel');
   const done = change(call, intent, {
     status: 'canceled',

@@ -34,7 +34,7 @@ export interface Item {
   created: number;
 }
 
-export function itemsOf(subscription: Thing): Item[] {
+function itemsOf(subscription: Thing): Item[] {
   return (subscription.items as { data: Item[] }).data;
 }
 

@@ -29,7 +29,8 @@ describe('dates', () => {
       false,
       false,
     ]);
-    expect(['Europe/Dublin', 'Nowhere/Land', ''].map(isTimeZone)).toEqual([true, false, false]);
+    const zones = ['Europe/Dublin', 'Nowhere/Land', '', '+05:30', 'UTC-3'];
+    expect(zones.map(isTimeZone)).toEqual([true, false, false, false, false]);
   });
 
   it('counts days across a leap day', () => {

@@ -20,7 +20,7 @@ export function isIsoDate(text: string): boolean {
   return monthPattern.test(text.slice(0, 7)) && day >= 1 && day <= daysInMonth(text.slice(0, 7));
 }
 
-export function isMonth(text: string): boolean {
+function isMonth(text: string): boolean {
   return monthPattern.test(text);
 }
 
@@ -28,11 +28,13 @@ export function isTimeOfDay(text: string): boolean {
   return timePattern.test(text);
 }
 
-/** True for a zone of the IANA time zone database that this runtime knows. */
+/**
+ * True for a zone of the IANA time zone database that this runtime knows. A bare offset is none:
+ * it has no summer time, and PostgreSQL reads its sign the other way round.
+ */
 export function isTimeZone(zone: string): boolean {
   try {
-    Temporal.Instant.fromEpochMilliseconds(0).toZonedDateTimeISO(zone);
-    return true;
+    return /^[A-Za-z]/.test(zone) && new Intl.DateTimeFormat('en', { timeZone: zone }) !== null;
   } catch {
     return false;
   }

@@ -23,6 +23,5 @@ export const accountGroups = {
 } as const;
 
 export type AccountCode = keyof typeof accountGroups;
-export type AccountGroup = (typeof accountGroups)[AccountCode];
 
 export const accountCodes = Object.keys(accountGroups) as readonly AccountCode[];

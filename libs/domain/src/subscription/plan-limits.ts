@@ -1,5 +1,5 @@
 /** What a plan counts: stores, machines in them, and people of the shop's crew. */
-export const countedThings = ['stores', 'machines', 'crew'] as const;
+const countedThings = ['stores', 'machines', 'crew'] as const;
 export type CountedThing = (typeof countedThings)[number];
 
 export type Counts = Record<CountedThing, number>;

@@ -120,7 +120,7 @@ export function lineNet(line: DocumentLine): number {
 }
 
 /** BR-CO-17 (tax = base x rate, rounded to the minor unit) for every category and rate. */
-export function categoryTotals(amounts: readonly DocumentAdjustment[]): CategoryTotal[] {
+function categoryTotals(amounts: readonly DocumentAdjustment[]): CategoryTotal[] {
   const totals = new Map<string, CategoryTotal>();
   for (const { amount, category } of amounts) {
     const key = `${category.code} ${category.basisPoints}`;

@@ -12,7 +12,7 @@ export interface PastPart extends PastJob {
 }
 
 /** Signed-off jobs on the same machine, the latest first. */
-export function pastJobs({ job, earlierJobs }: RulingContext): PastJob[] {
+function pastJobs({ job, earlierJobs }: RulingContext): PastJob[] {
   return earlierJobs
     .filter((earlier) => earlier.machineId === job.machineId && earlier.jobId !== job.jobId)
     .map((earlier) => ({ job: earlier, daysAgo: daysBetween(earlier.signedOffOn, job.on) }))

@@ -9,7 +9,7 @@ export function otherOutcomes(line: { list: number; cost: number }): Outcome[] {
   return BEARERS.map((bearer) => outcomeFor(line, bearer));
 }
 
-export function outcomeFor(line: { list: number; cost: number }, bearer: Bearer): Outcome {
+function outcomeFor(line: { list: number; cost: number }, bearer: Bearer): Outcome {
   return {
     bearer,
     charged: bearer === 'store' ? line.list : 0,

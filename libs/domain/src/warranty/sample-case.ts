@@ -8,7 +8,7 @@ import {
 } from './case';
 
 /** Invented rules, lines and jobs for the specs of this folder. The work is done on 6 May 2031. */
-export const sampleRules: WarrantyRules = {
+const sampleRules: WarrantyRules = {
   labourDays: 90,
   partDays: 60,
   partDaysByCategory: { door: 180 },

@@ -18,7 +18,7 @@ export interface Claims {
 
 const issuer = 'tumblewright';
 /** Short, because a token is not looked up: what was taken away ends with it. */
-export const accessTokenSeconds = 600;
+const accessTokenSeconds = 600;
 
 let key: { secret: string; object: KeyObject } | undefined;
 

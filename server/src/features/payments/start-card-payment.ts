@@ -135,7 +135,7 @@ async function newPayment(bind: Record<string, unknown>): Promise<Key> {
 }
 
 /** Asked again with the same key, the card payment service answers with the same session. */
-export function openSession(
+function openSession(
   context: Pick<Context, 'shopId'>,
   asked: AskedPayment,
 ): Promise<Stripe.Checkout.Session> {

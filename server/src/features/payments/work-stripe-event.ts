@@ -27,7 +27,7 @@ export function stripeEventJob(workPlatformEvent: PlatformEventWork): Job {
 }
 
 /** Works a stored event. Working it twice changes nothing, so it is noted as worked afterwards. */
-export async function workStripeEvent(
+async function workStripeEvent(
   eventId: string,
   now: Date,
   workPlatformEvent: PlatformEventWork,

@@ -20,7 +20,7 @@ export async function usageOf(context: Pick<Context, 'shopId'>): Promise<Counts>
 }
 
 /** What the plan of the shop allows, or undefined for a shop without a subscription. */
-export async function limitsOf(context: Pick<Context, 'shopId'>): Promise<Counts | undefined> {
+async function limitsOf(context: Pick<Context, 'shopId'>): Promise<Counts | undefined> {
   return row<Counts>(
     `select p.store_limit as stores, p.machine_limit as machines, p.crew_limit as crew
      from subscriptions s join plans p on p.id = s.plan_id where s.shop_id = $shopId`,
