@@ -55,6 +55,7 @@ export { AmountField } from './fields/amount-field';
 export { AmountInput } from './fields/amount-input';
 export { CheckField } from './fields/check-field';
 export { DistanceField } from './fields/distance-field';
+export { FindField } from './fields/find-field';
 export { NumberField } from './fields/number-field';
 export { PercentField } from './fields/percent-field';
 export { SelectField } from './fields/select-field';

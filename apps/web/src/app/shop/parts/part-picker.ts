@@ -1,45 +1,19 @@
-import { ChangeDetectionStrategy, Component, inject, input, output, signal } from '@angular/core';
-import { rxResource, toObservable, toSignal } from '@angular/core/rxjs-interop';
-import { MatAutocomplete, MatAutocompleteTrigger, MatOption } from '@angular/material/autocomplete';
-import { MatFormField, MatLabel } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
-import { debounceTime, distinctUntilChanged } from 'rxjs';
+import { ChangeDetectionStrategy, Component, inject, input, output } from '@angular/core';
+import { FindField } from '@lib/ui';
+import { map } from 'rxjs';
 import { type Part, PartsApi } from './parts-api';
-
-const pause = 250;
 
 /** Finds a part by number or name while it is typed. */
 @Component({
   selector: 'tw-part-picker',
-  imports: [MatAutocomplete, MatAutocompleteTrigger, MatFormField, MatInput, MatLabel, MatOption],
+  imports: [FindField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <mat-form-field subscriptSizing="dynamic">
-      <mat-label>{{ label() }}</mat-label>
-      <input
-        #field
-        matInput
-        [matAutocomplete]="found"
-        (input)="typed.set(field.value.trim())"
-        (keydown.enter)="$event.preventDefault()"
-      />
-      <mat-autocomplete
-        #found="matAutocomplete"
-        autoActiveFirstOption
-        (optionSelected)="pick($event.option.value, field)"
-      >
-        @for (part of parts(); track part.id) {
-          <mat-option [value]="part">{{ part.number }}, {{ part.name }}</mat-option>
-        }
-      </mat-autocomplete>
-    </mat-form-field>
+    <tw-find-field [label]="label()" [find]="find" [words]="words" (picked)="picked.emit($event)" />
   `,
   styles: `
     :host {
       display: block;
-    }
-    mat-form-field {
-      inline-size: 100%;
     }
   `,
 })
@@ -51,23 +25,9 @@ export class PartPicker {
   readonly except = input<string>();
   readonly picked = output<Part>();
 
-  protected readonly typed = signal('');
-  readonly #sought = toSignal(
-    toObservable(this.typed).pipe(debounceTime(pause), distinctUntilChanged()),
-    { initialValue: '' },
-  );
-  readonly #found = rxResource({
-    params: () => this.#sought() || undefined,
-    stream: ({ params }) => this.#api.list({ q: params, limit: 10 }),
-  });
-  protected readonly parts = () => {
-    const found = this.#found.hasValue() ? this.#found.value().items : [];
-    return found.filter(({ id }) => id !== this.except());
-  };
-
-  protected pick(part: Part, field: HTMLInputElement): void {
-    field.value = '';
-    this.typed.set('');
-    this.picked.emit(part);
-  }
+  protected readonly find = (typed: string) =>
+    this.#api
+      .list({ q: typed, limit: 10 })
+      .pipe(map(({ items }) => items.filter(({ id }) => id !== this.except())));
+  protected readonly words = ({ number, name }: Part) => `${number}, ${name}`;
 }
