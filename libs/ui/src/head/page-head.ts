@@ -41,10 +41,10 @@ import { RouterLink } from '@angular/router';
     }
     .words {
       min-inline-size: 0;
+      overflow-wrap: anywhere;
     }
     h1 {
       margin: 0;
-      overflow-wrap: anywhere;
     }
     p {
       margin: 0.25rem 0 0;

@@ -23,7 +23,7 @@ import { type Choice } from '../choices/choice-chips';
   `,
   styles: `
     :host {
-      flex: 1 1 8.5rem;
+      flex: 2 1 8.5rem;
       // Its longest choice may be cut, so that two filters stand side by side on a phone.
       min-inline-size: 0;
       max-inline-size: 13rem;

@@ -49,6 +49,13 @@ import { type VisitItem } from '../visits/visits-api';
       color: var(--tw-ink);
       text-decoration: none;
     }
+    a,
+    .trouble {
+      /* On the line of the day, where the place is the time, words are cut, not the card. */
+      white-space: var(--tw-day-words, normal);
+      overflow: hidden;
+      text-overflow: ellipsis;
+    }
     a:hover {
       text-decoration: underline;
     }

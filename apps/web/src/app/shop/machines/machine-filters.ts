@@ -41,12 +41,12 @@ interface FilteredList {
   `,
   styles: `
     :host {
-      display: flex;
-      flex-wrap: wrap;
-      gap: 0.75rem;
+      display: contents;
     }
     mat-form-field {
-      inline-size: 10rem;
+      flex: 2 1 8.5rem;
+      min-inline-size: 0;
+      max-inline-size: 13rem;
     }
   `,
 })

@@ -40,20 +40,18 @@ const nothingFoundRules: readonly Choice<PriceBook['nothingFound']>[] = [
           [control]="labour.incrementMinutes"
         />
       </div>
-      <div class="beside">
-        <tw-select-field
-          label="Extra minutes to reach a machine"
-          [options]="accessRules"
-          [control]="access.bill"
+      <tw-select-field
+        label="Extra minutes to reach a machine"
+        [options]="accessRules"
+        [control]="access.bill"
+      />
+      @if (access.bill.value === 'beyond_allowance') {
+        <tw-number-field
+          label="Allowance for each machine"
+          unit="min"
+          [control]="access.allowanceMinutes"
         />
-        @if (access.bill.value === 'beyond_allowance') {
-          <tw-number-field
-            label="Allowance for each machine"
-            unit="min"
-            [control]="access.allowanceMinutes"
-          />
-        }
-      </div>
+      }
       <tw-select-field
         label="When nothing is found"
         [options]="nothingFoundRules"

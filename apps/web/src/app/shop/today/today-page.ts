@@ -2,7 +2,16 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { rxResource, takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { counted, dayIn, dayText, LoadNote, PageHead, Reading, SectionHead } from '@lib/ui';
+import {
+  Callout,
+  counted,
+  dayIn,
+  dayText,
+  LoadNote,
+  PageHead,
+  Reading,
+  SectionHead,
+} from '@lib/ui';
 import { auditTime } from 'rxjs';
 import { Live } from '../../core/live/live';
 import { Session } from '../../core/session/session';
@@ -19,6 +28,7 @@ const askAgain = 5_000;
 @Component({
   selector: 'tw-today-page',
   imports: [
+    Callout,
     LoadNote,
     MatButton,
     NeedList,
@@ -29,6 +39,12 @@ const askAgain = 5_000;
     SetUpBanner,
   ],
   templateUrl: './today-page.html',
+  styles: `
+    .missing {
+      display: block;
+      margin-block-end: 1rem;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class TodayPage {
