@@ -1,6 +1,5 @@
-import { ChangeDetectionStrategy, Component, effect, inject, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, inject, input } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
-import { MatButton } from '@angular/material/button';
 import { moneyText } from '@lib/ui/format/money';
 import { MoneyText } from '@lib/ui/format/money-text';
 import { Reading } from '@lib/ui/format/reading';
@@ -10,12 +9,9 @@ import { PageHead } from '@lib/ui/head/page-head';
 import { SectionHead } from '@lib/ui/head/section-head';
 import { Callout } from '@lib/ui/notes/callout';
 import { LoadNote } from '@lib/ui/notes/load-note';
-import { problemText } from '@lib/ui/notes/problem-text';
 import { TicketCard } from '@lib/ui/ticket/ticket-card';
-import { firstValueFrom } from 'rxjs';
-import { openFile } from '../../core/api/save-file';
+import { StatementPdf } from '../../core/documents/statement-pdf';
 import { reloadOn } from '../../core/live/reload-on';
-import { Messages } from '../../core/messages/messages';
 import { Titles } from '../../core/navigation/titles';
 import { PayButton } from '../payments/pay-button';
 import { balanceRows } from './balance-rows';
@@ -30,12 +26,12 @@ import { type Statement, StatementsApi } from './statements-api';
     Callout,
     DayPipe,
     LoadNote,
-    MatButton,
     MoneyText,
     PageHead,
     PayButton,
     SectionHead,
     StatedVisit,
+    StatementPdf,
     TicketCard,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -44,7 +40,6 @@ import { type Statement, StatementsApi } from './statements-api';
 })
 export class StatementPage {
   readonly #api = inject(StatementsApi);
-  readonly #messages = inject(Messages);
   readonly #reading = inject(Reading);
   readonly #titles = inject(Titles);
 
@@ -54,7 +49,6 @@ export class StatementPage {
     params: () => this.statementId(),
     stream: ({ params }) => this.#api.show(params),
   });
-  protected readonly opening = signal(false);
   protected readonly rows = balanceRows;
 
   constructor() {
@@ -78,17 +72,5 @@ export class StatementPage {
 
   protected failing({ checks }: Statement): Statement['checks'] {
     return checks.filter(({ holds }) => !holds);
-  }
-
-  protected async openPdf({ id, pdfReady }: Statement): Promise<void> {
-    if (!pdfReady || this.opening()) return;
-    this.opening.set(true);
-    try {
-      openFile(await firstValueFrom(this.#api.pdf(id)));
-    } catch (problem) {
-      this.#messages.say(problemText(problem));
-    } finally {
-      this.opening.set(false);
-    }
   }
 }

@@ -18,8 +18,4 @@ export class StatementsApi {
   show(statementId: string) {
     return this.#api.call('statements.show', { params: { statementId } });
   }
-
-  pdf(statementId: string) {
-    return this.#api.file('statements.pdf', { params: { statementId } });
-  }
 }

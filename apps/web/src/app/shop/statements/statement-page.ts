@@ -12,7 +12,7 @@ import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { counted, LoadNote, MonthPipe, PageHead, problemText, SectionHead } from '@lib/ui';
 import { firstValueFrom } from 'rxjs';
-import { openFile } from '../../core/api/save-file';
+import { StatementPdf } from '../../core/documents/statement-pdf';
 import { reloadOn } from '../../core/live/reload-on';
 import { Messages } from '../../core/messages/messages';
 import { Titles } from '../../core/navigation/titles';
@@ -38,6 +38,7 @@ import { type Statement, StatementsApi } from './statements-api';
     StatedVisitTicket,
     StatementChecks,
     StatementMails,
+    StatementPdf,
     StatementTicket,
   ],
   templateUrl: './statement-page.html',
@@ -63,7 +64,6 @@ export class StatementPage {
     stream: ({ params }) => this.#api.show(params),
   });
   protected readonly mails = viewChild(StatementMails);
-  protected readonly opening = signal(false);
   protected readonly mailing = signal(false);
 
   constructor() {
@@ -73,17 +73,6 @@ export class StatementPage {
       const { name, storeName } = this.statement.value();
       this.#titles.name(`${name}, ${storeName}`);
     });
-  }
-
-  protected async openPdf({ id }: Statement): Promise<void> {
-    this.opening.set(true);
-    try {
-      openFile(await firstValueFrom(this.#api.pdf(id)));
-    } catch (problem) {
-      this.#messages.say(problemText(problem));
-    } finally {
-      this.opening.set(false);
-    }
   }
 
   protected async mail({ id, name, storeName }: Statement): Promise<void> {

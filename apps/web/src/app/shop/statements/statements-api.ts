@@ -20,10 +20,6 @@ export class StatementsApi {
     return this.#api.call('statements.show', { params: { statementId } });
   }
 
-  pdf(statementId: string) {
-    return this.#api.file('statements.pdf', { params: { statementId } });
-  }
-
   mail(statementId: string) {
     return this.#api.call('statements.mail', { params: { statementId } });
   }
