@@ -1,6 +1,7 @@
 export { BearerLabel } from './notes/bearer-label';
 export { Callout } from './notes/callout';
 export { ChoiceChips, type Choice } from './choices/choice-chips';
+export { choicesOf } from './choices/choices-of';
 export { CountStepper } from './choices/count-stepper';
 export { FieldError, errorText } from './choices/field-error';
 export { EmptyNote } from './notes/empty-note';

@@ -1,6 +1,6 @@
 import { FormControl, FormGroup, Validators } from '@angular/forms';
 import { causes, findingCodes, warrantyMarks } from '@lib/contracts/generated/values';
-import { labelFor, wordFor } from '@lib/ui';
+import { choicesOf, labelFor, wordFor } from '@lib/ui';
 import { type JobValues } from './job-values';
 
 export type JobForm = FormGroup<{ [K in keyof JobValues]: FormControl<JobValues[K]> }>;
@@ -42,12 +42,13 @@ export function jobForm({ ...values }: JobValues): JobForm {
 
 /** Shown before the others are asked for. */
 export const commonCodes = 6;
-export const codeChoices = findingCodes.map((value) => ({ value, label: wordFor(value) }));
+export const codeChoices = choicesOf(findingCodes, wordFor);
 
 /** Where nothing was found, the finding says so: no cause is asked for. */
-export const causeChoices = causes
-  .filter((value) => value !== 'nothing_found')
-  .map((value) => ({ value, label: wordFor(value) }));
+export const causeChoices = choicesOf(
+  causes.filter((value) => value !== 'nothing_found'),
+  wordFor,
+);
 
 export const markChoices = warrantyMarks.map((value) => ({
   value,

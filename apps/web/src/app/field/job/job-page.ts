@@ -16,6 +16,7 @@ import {
   AmountField,
   Callout,
   ChoiceChips,
+  choicesOf,
   conditionWords,
   CountStepper,
   labelFor,
@@ -131,7 +132,7 @@ export class JobPage {
   protected readonly left = linkedSignal<LeftState | null>(() => this.#leftBefore());
   protected readonly results = computed(() => {
     const left = this.left();
-    return left ? resultsFor(left).map((value) => ({ value, label: wordFor(value) })) : [];
+    return left ? choicesOf(resultsFor(left), wordFor) : [];
   });
   protected readonly result = linkedSignal<JobResult | null>(() => {
     const recorded = this.#resultBefore();

@@ -3,7 +3,15 @@ import { rxResource } from '@angular/core/rxjs-interop';
 import { RouterLink } from '@angular/router';
 import { subscriptionStates } from '@lib/contracts/generated/values';
 import { type SubscriptionState } from '@lib/contracts/web';
-import { ChoiceFilter, InstantPipe, labelFor, ListShell, listState, PageHead } from '@lib/ui';
+import {
+  ChoiceFilter,
+  choicesOf,
+  InstantPipe,
+  labelFor,
+  ListShell,
+  listState,
+  PageHead,
+} from '@lib/ui';
 import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { RowsExport } from '../../core/lists/rows-export';
 import { PlatformApi } from '../platform-api';
@@ -78,10 +86,7 @@ export class ShopList {
   protected readonly stateWords = stateWords;
   protected readonly needsLook = needsLook;
 
-  protected readonly states = subscriptionStates.map((value) => ({
-    value,
-    label: labelFor(stateWords(value)),
-  }));
+  protected readonly states = choicesOf(subscriptionStates, (value) => labelFor(stateWords(value)));
   readonly #plans = rxResource({ stream: () => this.#api.plans() });
   protected readonly plans = computed(() =>
     this.#plans.hasValue()

@@ -4,10 +4,11 @@ import { deliveryStates } from '@lib/contracts/generated/values';
 import { type DeliveryState } from '@lib/contracts/web';
 import {
   ChoiceFilter,
+  choicesOf,
   InstantPipe,
   instantText,
-  LabelPipe,
   labelFor,
+  LabelPipe,
   ListShell,
   listState,
   PageHead,
@@ -44,7 +45,7 @@ export class MailList {
   readonly #reading = inject(Reading);
   protected readonly session = inject(Session);
 
-  protected readonly states = deliveryStates.map((value) => ({ value, label: labelFor(value) }));
+  protected readonly states = choicesOf(deliveryStates);
   protected readonly mails = listState((ask) => this.#api.mails(ask), {
     sorts: { '-createdAt': 'Newest' },
     filters: filtersFromAddress({ state: '' as '' | DeliveryState }),

@@ -3,10 +3,9 @@ import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { contractName } from '@lib/domain/words/document-name';
 import {
-  type Choice,
   ChoiceFilter,
+  choicesOf,
   DayPipe,
-  labelFor,
   ListShell,
   listState,
   MoneyText,
@@ -41,10 +40,7 @@ export class ContractList {
   protected readonly session = inject(Session);
 
   protected readonly sign = moneySign();
-  protected readonly states: readonly Choice[] = states.map((value) => ({
-    value,
-    label: labelFor(value),
-  }));
+  protected readonly states = choicesOf(states);
   protected readonly clients = inject(ClientChoices).current();
   protected readonly contracts = listState((ask) => this.#api.list(ask), {
     sorts: { name: 'Name', '-startsOn': 'Newest first' },

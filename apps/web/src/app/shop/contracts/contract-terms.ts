@@ -7,15 +7,12 @@ import {
 } from '@angular/forms';
 import { machineKinds } from '@lib/contracts/generated/values';
 import { type MachineKind } from '@lib/contracts/web';
-import { type Choice, labelFor } from '@lib/ui';
+import { type Choice, choicesOf } from '@lib/ui';
 import { rulesFor } from '../../core/forms/rules-for';
 import { type Contract, type Terms } from './contracts-api';
 import { ruleOf, usualRule } from './rule-values';
 
-export const kinds: readonly Choice[] = machineKinds.map((value) => ({
-  value,
-  label: labelFor(value),
-}));
+export const kinds = choicesOf(machineKinds);
 
 export const shifts: readonly Choice<Contract['shift']>[] = [
   { value: 'next', label: 'It comes on the next open day' },

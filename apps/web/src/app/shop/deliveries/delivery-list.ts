@@ -6,11 +6,10 @@ import { deliveryStates } from '@lib/contracts/generated/values';
 import { type DeliveryState } from '@lib/contracts/web';
 import {
   Callout,
-  type Choice,
   ChoiceFilter,
+  choicesOf,
   counted,
   InstantPipe,
-  labelFor,
   ListShell,
   listState,
   PageHead,
@@ -60,10 +59,7 @@ export class DeliveryList {
   readonly #exports = inject(RowsExport);
   protected readonly counted = counted;
   protected readonly waitsForDecision = waitsForDecision;
-  protected readonly states: readonly Choice[] = deliveryStates.map((value) => ({
-    value,
-    label: labelFor(value),
-  }));
+  protected readonly states = choicesOf(deliveryStates);
 
   protected readonly deliveries = listState((ask) => this.#api.list(ask), {
     sorts: { '-createdAt': 'Newest first' },

@@ -1,8 +1,8 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import {
-  type Choice,
   ChoiceFilter,
+  choicesOf,
   DayPipe,
   labelFor,
   ListShell,
@@ -39,14 +39,8 @@ export class EntryList {
   protected readonly accountName = accountName;
   protected readonly documentWords = documentWords;
   protected readonly documentLink = documentLink;
-  protected readonly accounts: readonly Choice[] = accountCodes.map((value) => ({
-    value,
-    label: accountName(value),
-  }));
-  protected readonly kinds: readonly Choice[] = documentKinds.map((value) => ({
-    value,
-    label: labelFor(documentWords(value)),
-  }));
+  protected readonly accounts = choicesOf(accountCodes, accountName);
+  protected readonly kinds = choicesOf(documentKinds, (value) => labelFor(documentWords(value)));
   protected readonly stores = inject(StoreChoices).current();
   protected readonly entries = listState((ask) => this.#api.entries(ask), {
     sorts: { '-postedOn': 'Newest first', postedOn: 'Oldest first' },

@@ -1,18 +1,12 @@
 import { FormControl, type ValidatorFn } from '@angular/forms';
 import { energies, machineKinds } from '@lib/contracts/generated/values';
 import { type Energy, type MachineKind } from '@lib/contracts/web';
-import { type Choice, labelFor } from '@lib/ui';
+import { choicesOf } from '@lib/ui';
 import { rulesFor } from '../../core/forms/rules-for';
 
-export const kindChoices: readonly Choice<MachineKind>[] = machineKinds.map((value) => ({
-  value,
-  label: labelFor(value),
-}));
+export const kindChoices = choicesOf(machineKinds);
 
-export const energyChoices: readonly Choice<Energy>[] = energies.map((value) => ({
-  value,
-  label: labelFor(value),
-}));
+export const energyChoices = choicesOf(energies);
 
 function control<T>(value: T, validators: ValidatorFn[] = []): FormControl<T> {
   return new FormControl(value, { nonNullable: true, validators });

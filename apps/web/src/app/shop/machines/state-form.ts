@@ -8,7 +8,7 @@ import {
 } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { type Choice, ChoiceChips, FormNotes, labelFor, WordsField } from '@lib/ui';
+import { ChoiceChips, choicesOf, FormNotes, WordsField } from '@lib/ui';
 import { OpenForms } from '../../core/forms/open-forms';
 import { rulesFor } from '../../core/forms/rules-for';
 import { submission, type Submission } from '../../core/forms/submission';
@@ -46,10 +46,7 @@ export class StateForm implements OnInit {
   readonly stale = output<void>();
   readonly closed = output<void>();
 
-  protected readonly choices: readonly Choice[] = states.map((value) => ({
-    value,
-    label: labelFor(value),
-  }));
+  protected readonly choices = choicesOf(states);
   protected readonly form = this.#build.group({
     state: ['up' as SettableState],
     words: ['', rulesFor('machines.setState', 'words')],

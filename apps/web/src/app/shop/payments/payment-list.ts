@@ -2,8 +2,8 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import {
-  type Choice,
   ChoiceFilter,
+  choicesOf,
   DayPipe,
   labelFor,
   ListShell,
@@ -49,8 +49,8 @@ export class PaymentList {
   protected readonly nameOf = nameOf;
   protected readonly methodWords = methodWords;
   protected readonly paymentStateWords = paymentStateWords;
-  protected readonly methods = choices(methods, methodWords);
-  protected readonly states = choices(states, paymentStateWords);
+  protected readonly methods = choicesOf(methods, (value) => labelFor(methodWords(value)));
+  protected readonly states = choicesOf(states, (value) => labelFor(paymentStateWords(value)));
   protected readonly stores = inject(StoreChoices).current();
   protected readonly payments = listState((ask) => this.#api.list(ask), {
     sorts: { '-createdAt': 'Newest first' },
@@ -88,11 +88,4 @@ export class PaymentList {
       page: (asked) => this.#api.list({ ...ask, ...asked }),
     });
   }
-}
-
-function choices<T extends string>(
-  values: readonly T[],
-  words: (value: T) => string,
-): readonly Choice[] {
-  return values.map((value) => ({ value, label: labelFor(words(value)) }));
 }

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { lineKinds } from '@lib/contracts/generated/values';
-import { type Choice, labelFor, PercentField, SelectField, TextField } from '@lib/ui';
+import { type Choice, choicesOf, PercentField, SelectField, TextField } from '@lib/ui';
 import { type BookForm, rateForm } from './book-form';
 import { type PriceBook } from './price-book-api';
 
@@ -58,10 +58,7 @@ export class TaxesSection {
   readonly validFrom = input.required<string>();
 
   protected readonly roundings = roundings;
-  protected readonly kindChoices: readonly Choice[] = lineKinds.map((value) => ({
-    value,
-    label: labelFor(value),
-  }));
+  protected readonly kindChoices = choicesOf(lineKinds);
 
   protected add(): void {
     const { rates } = this.book().controls.taxes.controls;

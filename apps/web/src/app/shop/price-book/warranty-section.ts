@@ -3,15 +3,7 @@ import { rxResource } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { bearers, causes } from '@lib/contracts/generated/values';
-import {
-  AmountField,
-  type Choice,
-  ChoiceChips,
-  labelFor,
-  NumberField,
-  SelectField,
-  TextField,
-} from '@lib/ui';
+import { AmountField, ChoiceChips, choicesOf, NumberField, SelectField, TextField } from '@lib/ui';
 import { PartsApi } from '../parts/parts-api';
 import { type BookForm, categoryForm } from './book-form';
 
@@ -99,8 +91,4 @@ export class WarrantySection {
     partDaysByCategory.removeAt(index);
     partDaysByCategory.markAsDirty();
   }
-}
-
-function choicesOf(values: readonly string[]): readonly Choice[] {
-  return values.map((value) => ({ value, label: labelFor(value) }));
 }

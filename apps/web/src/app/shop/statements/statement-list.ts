@@ -5,8 +5,8 @@ import { RouterLink } from '@angular/router';
 import {
   type Choice,
   ChoiceFilter,
+  choicesOf,
   DayPipe,
-  labelFor,
   ListShell,
   listState,
   MoneyText,
@@ -55,10 +55,7 @@ export class StatementList {
   protected readonly session = inject(Session);
 
   protected readonly sign = moneySign();
-  protected readonly states: readonly Choice[] = states.map((value) => ({
-    value,
-    label: labelFor(value),
-  }));
+  protected readonly states = choicesOf(states);
   protected readonly statements = listState((ask) => this.#api.list(ask), {
     sorts: {
       '-month': 'Newest month',

@@ -4,7 +4,16 @@ import { RouterLink } from '@angular/router';
 import { visitStates } from '@lib/contracts/generated/values';
 import { type VisitState } from '@lib/contracts/web';
 import { ticketName } from '@lib/domain/words/document-name';
-import { ChoiceFilter, DayPipe, labelFor, ListShell, listState, PageHead, Reading } from '@lib/ui';
+import {
+  ChoiceFilter,
+  choicesOf,
+  DayPipe,
+  labelFor,
+  ListShell,
+  listState,
+  PageHead,
+  Reading,
+} from '@lib/ui';
 import { filtersFromAddress, keepInAddress } from '../../core/lists/address-filters';
 import { reloadOn } from '../../core/live/reload-on';
 import { Session } from '../../core/session/session';
@@ -44,10 +53,7 @@ export class VisitList {
   protected readonly states = [
     { value: 'live', label: 'Still to do' },
     { value: 'unticketed', label: 'Not signed off' },
-    ...visitStates.map((value) => ({
-      value,
-      label: labelFor(value),
-    })),
+    ...choicesOf(visitStates),
   ];
   protected readonly mayPlan = computed(() => this.session.mayChange('visits.plan'));
   protected readonly stateWords = stateWords;
