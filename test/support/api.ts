@@ -1,4 +1,10 @@
-import { type OperationId, operations, type Operation, storesAnswer } from '@lib/contracts';
+import {
+  type OperationId,
+  operations,
+  type Operation,
+  problemsOf,
+  storesAnswer,
+} from '@lib/contracts';
 import { type Express } from 'express';
 import request, { type Response } from 'supertest';
 import { v7 as uuid } from 'uuid';
@@ -30,9 +36,19 @@ export function api(app: Express, token?: string) {
       if (storesAnswer(operation)) sent = sent.set('Idempotency-Key', ask.key ?? uuid());
       if (ask.file) {
         for (const [name, value] of Object.entries(ask.body ?? {})) sent = sent.field(name, value);
-        return sent.attach('file', ask.file.content, ask.file.name);
+        return told(operation, await sent.attach('file', ask.file.content, ask.file.name));
       }
-      return ask.body === undefined ? sent : sent.send(ask.body as object);
+      return told(operation, await (ask.body === undefined ? sent : sent.send(ask.body as object)));
     },
   };
+}
+
+/** Refuses a problem that the API document does not tell of: whoever reads that must be able to. */
+export function told(operation: Operation, response: Response): Response {
+  if (!response.type.includes('problem+json')) return response;
+  const type = String(response.body.type).replace('/problems/', '');
+  if (type !== 'internal' && !(problemsOf(operation) as string[]).includes(type)) {
+    throw new Error(`The document of ${operation.id} does not tell of the problem ${type}.`);
+  }
+  return response;
 }

@@ -2,7 +2,7 @@ import { type Operation, type OperationId, operations } from '@lib/contracts';
 import { parseSetCookie } from 'cookie';
 import { type Express } from 'express';
 import request, { type Response } from 'supertest';
-import { type Ask } from './api';
+import { type Ask, told } from './api';
 
 /** Asks without a token and keeps cookies as a browser does: for what stands before a session. */
 export class Browser {
@@ -30,7 +30,7 @@ export class Browser {
     for (const [name, value] of Object.entries(ask.headers ?? {})) sent = sent.set(name, value);
     const answer = await (ask.body === undefined ? sent : sent.send(ask.body as object));
     this.keep(answer);
-    return answer;
+    return told(operation, answer);
   }
 
   private keep(answer: Response): void {

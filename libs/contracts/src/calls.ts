@@ -100,6 +100,7 @@ export const callOperations = defineOperations({
         error: 'are needed to say what it is',
       }),
     answer: callShown,
+    problems: ['not-found', 'conflict'],
   },
   'calls.change': {
     method: 'PATCH',

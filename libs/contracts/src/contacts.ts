@@ -47,6 +47,7 @@ export const contactOperations = defineOperations({
       },
     }),
     answer: listOf(contact),
+    problems: ['not-found'],
   },
   'contacts.create': {
     method: 'POST',

@@ -88,6 +88,7 @@ export const paymentOperations = defineOperations({
       words: words(200).default(''),
     }),
     answer: paymentShown,
+    problems: ['not-found'],
   },
   'payments.startCard': {
     method: 'POST',
@@ -114,7 +115,7 @@ export const paymentOperations = defineOperations({
      * `?cancelled=1` when the person turned back.
      */
     answer: z.object({ paymentId: id, url: z.string() }),
-    problems: ['conflict', 'card-payment-failed'],
+    problems: ['conflict', 'card-payment-failed', 'not-found'],
   },
   'payments.check': {
     method: 'POST',

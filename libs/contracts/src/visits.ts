@@ -161,7 +161,7 @@ export const visitOperations = defineOperations({
         error: 'is needed for a visit without a call',
       }),
     answer: visitShown,
-    problems: ['conflict'],
+    problems: ['conflict', 'not-found'],
   },
   'visits.change': {
     method: 'PATCH',
