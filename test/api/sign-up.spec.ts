@@ -1,25 +1,20 @@
 import { platformRow, platformRows } from '../../server/src/core/database/tenancy';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
+import { addAdmin } from '../../server/src/features/platform/add-admin';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import { Browser } from '../support/browser';
 import { buildPerson, buildShop } from '../support/factories';
 import { newestMail, tokenIn } from '../support/mail';
 import { givePassword, goodPassword } from '../support/people';
+import { setUpMailServer } from '../support/set-ups';
 
 describe('opening a shop', () => {
   let server: TestServer;
   let mailbox: Mailbox;
   let n = 0;
 
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer({ SMTP_URL: mailbox.smtpUrl });
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server, mailbox } = made));
 
   const form = (values: Record<string, unknown> = {}) => ({
     shopName: 'Anchor Repairs',
@@ -117,6 +112,19 @@ describe('opening a shop', () => {
       body: { email: known.email, password: 'another good one' },
     });
     expect(chosen.status).toBe(401);
+  });
+
+  it('gives a known person who has no password yet none that somebody else typed', async () => {
+    const email = `admin-${++n}@platform.example`;
+    await addAdmin(email, 'New Admin');
+    const asked = form({ email, password: 'typed by an intruder' });
+    await browser().call('shops.signUp', { body: asked });
+    const letter = await newestMail(server, mailbox, email);
+    await browser().call('account.verifyEmail', { body: { token: tokenIn(letter) } });
+    const intruder = await browser().call('session.signIn', {
+      body: { email, password: asked.password },
+    });
+    expect(intruder.status).toBe(401);
   });
 
   it('refuses passwords that would be guessed, currencies and zones that are none', async () => {

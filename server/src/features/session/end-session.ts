@@ -47,7 +47,7 @@ export async function endSessionsOf(
 /** For the sweep: chains that ended or ran out a good while ago, with their tokens. */
 export async function forgetOldSessions(): Promise<void> {
   await platformRows(
-    `delete from refresh_tokens where session_id in (
+    `delete from sessions where id in (
        select id from sessions
        where coalesce(ended_at, expires_at) < now() - interval '30 days' limit 5000)`,
   );

@@ -104,13 +104,15 @@ async function addShop(context: PublicContext, signUp: SignUp): Promise<Owner> {
   return { shopId, userId: person.id, membershipId, name: person.name };
 }
 
-/** A person who is known keeps name and password: the link shows the address is theirs, no more. */
+/**
+ * A person who is known keeps name and password, also when they have none yet: the link shows the
+ * address is theirs, not that it was they who typed the password.
+ */
 async function addPerson(signUp: SignUp): Promise<{ id: string; name: string }> {
   const [added] = await platformRows<{ id: string; name: string }>(
     `insert into users (id, email, name, password_hash, email_verified_at)
      values ($id, $email, $name, $passwordHash, now())
      on conflict (email) do update set
-       password_hash = coalesce(users.password_hash, excluded.password_hash),
        email_verified_at = coalesce(users.email_verified_at, excluded.email_verified_at)
      returning id, name`,
     {
