@@ -1,10 +1,11 @@
 import { platformRow, platformRows } from '../../server/src/core/database/tenancy';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
-import { startTestServer, type TestServer } from '../support/app';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type TestServer } from '../support/app';
 import { Browser } from '../support/browser';
 import { buildPerson, buildShop, type TestPerson } from '../support/factories';
 import { newestMail, tokenIn } from '../support/mail';
 import { givePassword, goodPassword } from '../support/people';
+import { setUpMailServer } from '../support/set-ups';
 
 const newPassword = 'seven dry sheets';
 
@@ -13,14 +14,7 @@ describe('a person’s own account', () => {
   let mailbox: Mailbox;
   let person: TestPerson;
 
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer({ SMTP_URL: mailbox.smtpUrl });
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server, mailbox } = made));
   beforeEach(async () => {
     person = await buildPerson(await buildShop(), 'office', { name: 'Ola Office' });
     await givePassword(person);

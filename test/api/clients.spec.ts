@@ -11,20 +11,14 @@ import {
 } from '../support/factories';
 import { walk } from '../support/lists';
 import { buildVisitRow } from '../support/tickets';
+import { type Caller, setUpOffice } from '../support/set-ups';
 
 describe('clients', () => {
   let server: TestServer;
   let shop: TestShop;
-  let office: ReturnType<typeof api>;
+  let office: Caller;
 
-  beforeAll(async () => {
-    server = await startTestServer();
-  });
-  afterAll(() => server.close());
-  beforeEach(async () => {
-    shop = await buildShop();
-    office = api(server.app, (await buildPerson(shop, 'office')).token);
-  });
+  setUpOffice((made) => ({ server, shop, office } = made));
 
   it('numbers a client that was given no number, past numbers given by hand', async () => {
     await office.call('clients.create', { body: { name: 'Given', number: 'C-002' } });

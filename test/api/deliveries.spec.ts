@@ -1,10 +1,10 @@
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { systemContext } from '../../server/src/core/context';
 import { rows } from '../../server/src/core/database/tenancy';
 import { mostAttempts } from '../../server/src/core/mail/settle';
 import { sweepDeliveries } from '../../server/src/features/deliveries/send-deliveries';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildPerson,
   buildShop,
@@ -16,10 +16,10 @@ import {
   buildPayingStore,
   buildSignedOff,
   closedMonths,
-  mailEnvironment,
   type MoneyStore,
   workClose,
 } from '../support/money';
+import { setUpMailServer } from '../support/set-ups';
 
 const { last } = closedMonths();
 
@@ -37,14 +37,7 @@ describe('deliveries', () => {
   let shop: TestShop;
   let office: TestPerson;
   let store: MoneyStore;
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer(mailEnvironment(mailbox));
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server, mailbox } = made));
   beforeEach(async () => {
     mailbox.setMode('normal');
     shop = await buildShop();

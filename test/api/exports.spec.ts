@@ -1,32 +1,25 @@
 import { parse } from 'csv-parse/sync';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildClient,
   buildLaundry,
   buildMachine,
   buildPerson,
-  buildShop,
   buildStore,
   insert,
   type TestShop,
 } from '../support/factories';
 import { pauseShop } from '../support/plans';
 import { workQueue } from '../support/queue';
+import { type Caller, setUpOffice } from '../support/set-ups';
 
 describe('exports', () => {
   let server: TestServer;
   let shop: TestShop;
-  let office: ReturnType<typeof api>;
+  let office: Caller;
 
-  beforeAll(async () => {
-    server = await startTestServer();
-  });
-  afterAll(() => server.close());
-  beforeEach(async () => {
-    shop = await buildShop();
-    office = api(server.app, (await buildPerson(shop, 'office')).token);
-  });
+  setUpOffice((made) => ({ server, shop, office } = made));
 
   const download = (kind: string, query: Record<string, string> = {}) =>
     office.call('exports.download', { params: { kind }, query });

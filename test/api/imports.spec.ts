@@ -3,12 +3,11 @@ import { systemContext } from '../../server/src/core/context';
 import { claimImport } from '../../server/src/features/imports/claim';
 import { sweepImports, workImport } from '../../server/src/features/imports/work-import';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildClient,
   buildLaundry,
   buildPerson,
-  buildShop,
   buildStore,
   inShop,
   type TestShop,
@@ -16,6 +15,7 @@ import {
 import { walk } from '../support/lists';
 import { limitPlan, pauseShop } from '../support/plans';
 import { workQueue } from '../support/queue';
+import { type Caller, setUpOffice } from '../support/set-ups';
 import { write } from '../../server/src/core/database/tenancy';
 
 const storesFile = [
@@ -29,16 +29,9 @@ const storesFile = [
 describe('imports', () => {
   let server: TestServer;
   let shop: TestShop;
-  let office: ReturnType<typeof api>;
+  let office: Caller;
 
-  beforeAll(async () => {
-    server = await startTestServer();
-  });
-  afterAll(() => server.close());
-  beforeEach(async () => {
-    shop = await buildShop();
-    office = api(server.app, (await buildPerson(shop, 'office')).token);
-  });
+  setUpOffice((made) => ({ server, shop, office } = made));
 
   function send(kind: string, content: string | Buffer, id?: string) {
     const file = { name: `${kind}.csv`, content: Buffer.from(content) };

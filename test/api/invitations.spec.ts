@@ -1,7 +1,7 @@
 import { platformRow, platformRows } from '../../server/src/core/database/tenancy';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import { Browser } from '../support/browser';
 import {
   buildLaundry,
@@ -14,6 +14,7 @@ import {
 import { newestMail, tokenIn } from '../support/mail';
 import { givePassword, goodPassword } from '../support/people';
 import { limitPlan, pauseShop } from '../support/plans';
+import { setUpMailServer } from '../support/set-ups';
 
 describe('invitations', () => {
   let server: TestServer;
@@ -22,14 +23,7 @@ describe('invitations', () => {
   let owner: TestPerson;
   let invite: (body: Record<string, unknown>, by?: TestPerson) => ReturnType<Browser['call']>;
 
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer({ SMTP_URL: mailbox.smtpUrl });
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server, mailbox } = made));
   beforeEach(async () => {
     shop = await buildShop({ name: 'Harbour Appliance' });
     owner = await buildPerson(shop, 'shop_owner', { name: 'Olive Owner' });

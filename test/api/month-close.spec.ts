@@ -4,10 +4,10 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { canonicalJson } from '@lib/domain';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { rows } from '../../server/src/core/database/tenancy';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildPerson,
   buildShop,
@@ -21,11 +21,11 @@ import {
   buildPayingStore,
   buildSignedOff,
   closedMonths,
-  mailEnvironment,
   type MoneyStore,
   workClose,
 } from '../support/money';
 import { pdfText } from '../support/pdf-text';
+import { setUpMailServer } from '../support/set-ups';
 
 const { last, before, lastDay } = closedMonths();
 
@@ -36,9 +36,8 @@ describe('closing a month', () => {
   let office: TestPerson;
   let store: MoneyStore;
   let quiet: MoneyStore;
+  setUpMailServer((made) => ({ server, mailbox } = made));
   beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer(mailEnvironment(mailbox));
     shop = await buildShop({ name: 'Harbour Appliance' });
     office = await buildPerson(shop, 'office');
     store = await buildPayingStore(shop, { email: 'ada@laundry.example' });
@@ -50,10 +49,6 @@ describe('closing a month', () => {
       tax: 3_147,
       borneByShop: 17_100,
     });
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
   });
   const asOffice = () => api(server.app, office.token);
 

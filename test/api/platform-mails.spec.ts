@@ -1,12 +1,13 @@
 import { v7 as uuid } from 'uuid';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
+import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { platformRow, platformRows, withPlatform } from '../../server/src/core/database/tenancy';
 import { queuePlatformMail } from '../../server/src/features/platform-mails/queue-platform-mail';
 import {
   sendPlatformMails,
   sweepPlatformMails,
 } from '../../server/src/features/platform-mails/send-platform-mails';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
+import { setUpMailServer } from '../support/set-ups';
 
 interface Row {
   state: string;
@@ -21,14 +22,7 @@ describe('mails of sign-in and the platform', () => {
   let mailbox: Mailbox;
   let to: string;
 
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer({ SMTP_URL: mailbox.smtpUrl });
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server, mailbox } = made));
   beforeEach(() => {
     to = `${uuid().slice(-8)}@people.example`;
     mailbox.setMode('normal');

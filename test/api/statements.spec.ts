@@ -1,13 +1,12 @@
 import { spawnSync } from 'node:child_process';
 import { addDays, monthBounds } from '@lib/domain';
-import { type Mailbox, startMailbox } from '../../infra/fakes/mailbox/mailbox';
 import { systemContext } from '../../server/src/core/context';
 import { rows } from '../../server/src/core/database/tenancy';
 import { closeMonth } from '../../server/src/features/statements/close-month';
 import { finishRun } from '../../server/src/features/statements/finish-run';
 import { sweepStatements } from '../../server/src/features/statements/sweep-statements';
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildPerson,
   buildShop,
@@ -21,30 +20,22 @@ import {
   buildPayingStore,
   buildSignedOff,
   closedMonths,
-  mailEnvironment,
   type MoneyStore,
   workClose,
   zone,
 } from '../support/money';
 import { pauseShop } from '../support/plans';
+import { setUpMailServer } from '../support/set-ups';
 
 const { last, before, lastDay } = closedMonths();
 const endOfBefore = monthBounds(before, zone);
 
 describe('statements', () => {
   let server: TestServer;
-  let mailbox: Mailbox;
   let shop: TestShop;
   let office: TestPerson;
   let store: MoneyStore;
-  beforeAll(async () => {
-    mailbox = await startMailbox();
-    server = await startTestServer(mailEnvironment(mailbox));
-  });
-  afterAll(async () => {
-    await server.close();
-    await mailbox.close();
-  });
+  setUpMailServer((made) => ({ server } = made));
   beforeEach(async () => {
     shop = await buildShop();
     office = await buildPerson(shop, 'office');

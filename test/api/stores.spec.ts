@@ -1,5 +1,5 @@
 import { api } from '../support/api';
-import { startTestServer, type TestServer } from '../support/app';
+import { type TestServer } from '../support/app';
 import {
   buildClient,
   buildLaundry,
@@ -13,20 +13,14 @@ import {
 import { limitPlan } from '../support/plans';
 import { walk } from '../support/lists';
 import { buildVisitRow } from '../support/tickets';
+import { type Caller, setUpOffice } from '../support/set-ups';
 
 describe('stores', () => {
   let server: TestServer;
   let shop: TestShop;
-  let office: ReturnType<typeof api>;
+  let office: Caller;
 
-  beforeAll(async () => {
-    server = await startTestServer();
-  });
-  afterAll(() => server.close());
-  beforeEach(async () => {
-    shop = await buildShop();
-    office = api(server.app, (await buildPerson(shop, 'office')).token);
-  });
+  setUpOffice((made) => ({ server, shop, office } = made));
 
   it('are added to a client of the shop only', async () => {
     const clientId = await buildClient(shop);

@@ -1,6 +1,5 @@
 import { monthBounds, monthOf, previousMonth, ticketPostings } from '@lib/domain';
 import { v7 as uuid } from 'uuid';
-import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { systemContext } from '../../server/src/core/context';
 import { rows } from '../../server/src/core/database/tenancy';
 import { postDocument } from '../../server/src/features/ledger/post';
@@ -150,8 +149,6 @@ export async function workClose(server: TestServer): Promise<void> {
       (await workQueue(server, 'deliveries-send'));
   }
 }
-
-export const mailEnvironment = (mailbox: Mailbox) => ({ SMTP_URL: mailbox.smtpUrl });
 
 /** What must hold of a shop's books whatever happened to it. */
 export async function bookTroubles(shop: TestShop): Promise<string[]> {
