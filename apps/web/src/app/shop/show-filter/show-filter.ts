@@ -25,8 +25,13 @@ interface Showing {
     </mat-form-field>
   `,
   styles: `
+    :host {
+      flex: 2 1 8.5rem;
+      min-inline-size: 0;
+      max-inline-size: 13rem;
+    }
     mat-form-field {
-      inline-size: 9rem;
+      inline-size: 100%;
     }
   `,
 })
