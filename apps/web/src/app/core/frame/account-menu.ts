@@ -74,10 +74,16 @@ export class AccountMenu {
 
   protected async goOnAs(membershipId: string): Promise<void> {
     this.close();
+    const before = this.#router.url;
+    // The page is left before the switch: it may hold what is not saved yet, and the same page would
+    // go on showing the other one's stores and balances, since the router keeps it where it can.
+    const left = await this.#router.navigateByUrl('/memberships', { skipLocationChange: true });
+    if (left === false) return;
     try {
       await this.session.switchTo(membershipId);
       await this.#router.navigateByUrl('/', { onSameUrlNavigation: 'reload' });
     } catch (error) {
+      await this.#router.navigateByUrl(before, { onSameUrlNavigation: 'reload' });
       this.#messages.say(problemText(error));
     }
   }

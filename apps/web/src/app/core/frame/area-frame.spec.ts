@@ -78,6 +78,46 @@ describe('AreaFrame', () => {
     expect(host.textContent).toContain('Thornbury Appliance Works is paused');
   });
 
+  it('leaves the page of one membership before it goes on as another', async () => {
+    const { press } = await framed();
+    const router = TestBed.inject(Router);
+    await router.navigateByUrl('/field/day');
+    await press('Imre Valdo');
+    await press('Alder & Finch Laundries');
+    expect(router.url).toBe('/memberships');
+    server
+      .expectOne('/api/session/membership')
+      .flush(anAnswer({ membership: anAnswer().memberships[1] ?? null }));
+    await settled();
+    expect(router.url).toBe('/');
+  });
+
+  it('stays who one is when the page may not be left', async () => {
+    const { press } = await framed();
+    const router = TestBed.inject(Router);
+    router.resetConfig([
+      { path: 'field/form', canDeactivate: [() => false], children: [] },
+      { path: '**', children: [] },
+    ]);
+    await router.navigateByUrl('/field/form');
+    await press('Imre Valdo');
+    await press('Alder & Finch Laundries');
+    server.expectNone('/api/session/membership');
+    expect(router.url).toBe('/field/form');
+  });
+
+  it('goes back to the page when there is no going on', async () => {
+    const { press } = await framed();
+    const router = TestBed.inject(Router);
+    await router.navigateByUrl('/field/day');
+    await press('Imre Valdo');
+    await press('Alder & Finch Laundries');
+    server.expectOne('/api/session/membership').error(new ProgressEvent('error'));
+    await settled();
+    expect(router.url).toBe('/field/day');
+    expect(TestBed.inject(Session).role()).toBe('tech');
+  });
+
   it('goes on as another membership', async () => {
     const { host, press } = await framed();
     await press('Imre Valdo');
