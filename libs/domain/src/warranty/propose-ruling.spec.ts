@@ -5,21 +5,19 @@ import { proposeRuling } from './propose-ruling';
 import { REASON_CODES } from './ruling';
 import {
   accessLine,
+  covering,
   labourLine,
+  oldLock,
+  oldRepair,
+  ourLock,
   partLine,
+  sameFault,
   sampleCase,
   sampleEarlierJob,
-  samplePart,
   tripLine,
 } from './sample-case';
 import { coverRows } from './sample-cover-rows';
 import { faultRows, hinge } from './sample-fault-rows';
-
-const covering = { name: 'C-12', labour: true, parts: true, trip: true, machineKinds: null };
-const ourLock = sampleEarlierJob({ parts: [samplePart()] });
-const oldLock = sampleEarlierJob({ signedOffOn: '2030-11-07', parts: [samplePart()] });
-const oldRepair = sampleEarlierJob({ signedOffOn: '2031-02-04' });
-const sameFault = sampleEarlierJob({ component: 'drain', symptom: 'wont_lock' });
 
 const rows = [...faultRows, ...coverRows];
 

@@ -92,3 +92,14 @@ export function sampleCase(
     ...rest,
   };
 }
+
+/** A contract that covers all the work on every machine. */
+export const covering = { name: 'C-12', labour: true, parts: true, trip: true, machineKinds: null };
+
+export const ourLock = sampleEarlierJob({ parts: [samplePart()] });
+/** On the last day of the warranty on parts of doors. */
+export const oldLock = sampleEarlierJob({ signedOffOn: '2030-11-07', parts: [samplePart()] });
+/** A day past the warranty on labour. */
+export const oldRepair = sampleEarlierJob({ signedOffOn: '2031-02-04' });
+/** Another component, but what fails now was its symptom then: a callback. */
+export const sameFault = sampleEarlierJob({ component: 'drain', symptom: 'wont_lock' });

@@ -1,19 +1,18 @@
 import { type RulingRow } from './ruling-row';
 import {
+  covering,
   labourLine,
+  oldLock,
+  oldRepair,
+  ourLock,
   partLine,
+  sameFault,
   sampleCase,
   sampleEarlierJob,
   samplePart,
   tripLine,
 } from './sample-case';
 import { hinge } from './sample-fault-rows';
-
-const covering = { name: 'C-12', labour: true, parts: true, trip: true, machineKinds: null };
-const ourLock = sampleEarlierJob({ parts: [samplePart()] });
-const oldLock = sampleEarlierJob({ signedOffOn: '2030-11-07', parts: [samplePart()] });
-const oldRepair = sampleEarlierJob({ signedOffOn: '2031-02-04' });
-const sameFault = sampleEarlierJob({ component: 'drain', symptom: 'wont_lock' });
 
 /** Supplier, shop warranty, callback, contract, the bare mark. */
 export const coverRows: RulingRow[] = [

@@ -1,11 +1,11 @@
 import { type RulingRow } from './ruling-row';
 import {
   accessLine,
+  covering,
   labourLine,
+  ourLock,
   partLine,
   sampleCase,
-  sampleEarlierJob,
-  samplePart,
   tripLine,
 } from './sample-case';
 
@@ -16,8 +16,6 @@ export const hinge = {
   machineId: 'machine-4',
   work: 'hinge fitted',
 };
-const covering = { name: 'C-12', labour: true, parts: true, trip: true, machineKinds: null };
-const ourLock = sampleEarlierJob({ parts: [samplePart()] });
 
 /** Mistakes, nothing found, exclusions, consequences. */
 export const faultRows: RulingRow[] = [
