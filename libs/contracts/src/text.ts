@@ -1,13 +1,12 @@
 import { z } from 'zod';
 
 // eslint's no-control-regex would be right about regular expressions: these are code points.
-function isCleanText(value: string, allowLineBreaks: boolean): boolean {
+function isCleanText(value: string): boolean {
   if (!value.isWellFormed()) return false;
   for (const character of value) {
     const code = character.codePointAt(0) ?? 0;
-    if (code === 10 || code === 13 || code === 9) {
-      if (!allowLineBreaks) return false;
-    } else if (code < 32 || code === 127) return false;
+    const isSpace = code === 9 || code === 10 || code === 13;
+    if ((code < 32 && !isSpace) || code === 127) return false;
   }
   return true;
 }
@@ -16,7 +15,8 @@ function isCleanText(value: string, allowLineBreaks: boolean): boolean {
 export function line(max: number, min = 1) {
   return z
     .string()
-    .refine((v) => isCleanText(v, false), { error: 'holds characters that cannot be stored' })
+    .refine((v) => isCleanText(v), { error: 'holds characters that cannot be stored' })
+    .refine((v) => !/[\n\r\t]/.test(v), { error: 'holds a line break or a tab: one line is meant' })
     .trim()
     .min(min)
     .max(max);
@@ -26,7 +26,7 @@ export function line(max: number, min = 1) {
 export function words(max: number) {
   return z
     .string()
-    .refine((v) => isCleanText(v, true), { error: 'holds characters that cannot be stored' })
+    .refine((v) => isCleanText(v), { error: 'holds characters that cannot be stored' })
     .trim()
     .max(max);
 }
