@@ -48,13 +48,8 @@ export async function enqueue(
   data: Record<string, unknown>,
   options: SendOptions = {},
 ): Promise<void> {
-  const transaction = tenantTransaction() as unknown as {
-    connection: { query(text: string, values: unknown[]): Promise<{ rows: unknown[] }> };
-  };
-  await jobs().send(queue, data, {
-    ...sendOptions(queue, options),
-    db: { executeSql: (text, values) => transaction.connection.query(text, values) },
-  });
+  const { connection } = tenantTransaction() as unknown as Transacting;
+  await send(queue, data, options, connection);
 }
 
 /** Wakes a queue from the platform side, or outside any transaction. */
@@ -63,25 +58,46 @@ export async function enqueueNow(
   data: Record<string, unknown>,
   options: SendOptions = {},
 ): Promise<void> {
-  const open = platformDb().open.getStore() as unknown as
-    | { connection: { query(text: string, values: unknown[]): Promise<{ rows: unknown[] }> } }
-    | undefined;
+  const open = platformDb().open.getStore() as unknown as Transacting | undefined;
+  await send(queue, data, options, open?.connection);
+}
+
+interface Connection {
+  query(text: string, values: unknown[]): Promise<{ rows: unknown[] }>;
+}
+
+interface Transacting {
+  connection: Connection;
+}
+
+/** Through the connection of the open transaction, or by the queues' own. */
+async function send(
+  queue: QueueName,
+  data: Record<string, unknown>,
+  options: SendOptions,
+  connection: Connection | undefined,
+): Promise<void> {
+  const { singletonKey, startAfterSeconds } = options;
+  const db = connection
+    ? { executeSql: (text: string, values: unknown[]) => connection.query(text, values) }
+    : undefined;
+  if (singletonKey && (await waits(queue, singletonKey, db ?? jobs().getDb()))) return;
   await jobs().send(queue, data, {
-    ...sendOptions(queue, options),
-    ...(open
-      ? {
-          db: {
-            executeSql: (text: string, values: unknown[]) => open.connection.query(text, values),
-          },
-        }
-      : {}),
+    ...queues[queue],
+    ...(singletonKey ? { singletonKey } : {}),
+    ...(startAfterSeconds ? { startAfter: startAfterSeconds } : {}),
+    ...(db ? { db } : {}),
   });
 }
 
-function sendOptions(queue: QueueName, options: SendOptions): PgBoss.SendOptions {
-  return {
-    ...queues[queue],
-    ...(options.singletonKey ? { singletonKey: options.singletonKey } : {}),
-    ...(options.startAfterSeconds ? { startAfter: options.startAfterSeconds } : {}),
-  };
+/**
+ * pg-boss itself looks at a job's key only in queues where every job has one. Two who ask at once may
+ * both add a job: it does harm to nobody, unlike one more each minute while a worker is slow.
+ */
+async function waits(queue: QueueName, key: string, db: PgBoss.Db): Promise<boolean> {
+  const { rows } = (await db.executeSql(
+    `select 1 from pgboss.job where name = $1 and state < 'active' and singleton_key = $2 limit 1`,
+    [queue, key],
+  )) as { rows: unknown[] };
+  return rows.length > 0;
 }

@@ -11,6 +11,7 @@ import { sweepPlatformMails } from '../platform-mails/send-platform-mails';
 import { sweepSignIn } from '../sign-up/sweep-sign-in';
 import { sweepStatements } from '../statements/sweep-statements';
 import { sweepSubscriptions } from '../subscription/sweep-subscriptions';
+import { sweepAbsorbed } from '../tickets/absorb-ticket';
 
 type Step = [name: string, run: () => Promise<unknown>];
 
@@ -41,6 +42,7 @@ export function sweepShop(context: Context, log: Log): Promise<void> {
       ['payments', () => sweepPayments(context, log)],
       ['rounds', () => wakeRounds(context)],
       ['imports', () => sweepImports(context)],
+      ['absorbed costs', () => sweepAbsorbed(context)],
       ['old keys', () => forgetOldKeys(context)],
     ],
     log.child({ shopId: context.shopId }),

@@ -1,7 +1,8 @@
 import { type Bearer, type LineKind } from '@lib/contracts';
 import { absorbedPostings } from '@lib/domain';
-import { systemContext } from '../../core/context';
+import { type Context, systemContext } from '../../core/context';
 import { row, rows, withTenant } from '../../core/database/tenancy';
+import { enqueue } from '../../core/jobs/boss';
 import { type Job } from '../../core/jobs/work';
 import { postDocument } from '../ledger/post';
 
@@ -33,6 +34,32 @@ export async function absorbTicket(shopId: string, ticketId: string, now: Date):
       postedOn: ticket.on,
       postings: absorbedPostings({ storeId: ticket.storeId, lines }),
     });
+  });
+}
+
+/** Days back in which the sweep looks for a ticket whose job was lost. */
+const lookBackDays = 100;
+
+/** For the sweep: tickets of a shop whose own cost no job has posted, though one should have. */
+export function sweepAbsorbed(context: Context): Promise<void> {
+  return withTenant(context, async () => {
+    const unposted = await rows<{ id: string }>(
+      `select t.id from tickets t
+       where t.shop_id = $shopId and t.own_cost <> 0
+         and t.signed_off_on > $now::timestamptz::date - ${lookBackDays}
+         and t.signed_off_at < $now::timestamptz - interval '10 minutes'
+         and not exists (select 1 from entries e where e.shop_id = t.shop_id
+           and e.document_kind = 'absorbed' and e.document_id = t.id)
+       order by t.signed_off_on limit 100`,
+      { shopId: context.shopId, now: context.now },
+    );
+    for (const { id } of unposted) {
+      await enqueue(
+        'warranty-absorb',
+        { shopId: context.shopId, ticketId: id },
+        { singletonKey: `absorb ${id}` },
+      );
+    }
   });
 }
 
