@@ -54,7 +54,7 @@ async function dropEarlier(prefix: string): Promise<void> {
 }
 
 /** A migrated, empty database that nobody else uses. */
-export async function freshDatabase(): Promise<DatabaseUrls> {
+async function freshDatabase(): Promise<DatabaseUrls> {
   await ensureTemplate();
   const prefix = `tw_test_${process.env.JEST_WORKER_ID ?? '0'}_`;
   await dropEarlier(prefix);

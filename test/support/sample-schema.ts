@@ -26,7 +26,7 @@ export interface JsonSchema {
   default?: unknown;
 }
 
-export interface SampleOptions {
+interface SampleOptions {
   random: Random;
   /** What stands where an id is asked for; gets the name of its field. */
   id: (name: string) => string;

@@ -111,7 +111,7 @@ export async function buildPart(
   return insert(shop, 'parts', { number: `P-${n}`, name: `Part ${n}`, ...values });
 }
 
-export function contextOf(scene: Scene, role: 'owner' | 'office' | 'tech', now: Date): Context {
+function contextOf(scene: Scene, role: 'owner' | 'office' | 'tech', now: Date): Context {
   const person = scene[role];
   return {
     requestId: 'spec',

@@ -7,7 +7,7 @@ export interface Shot {
   body?: string;
 }
 
-export interface LoadResult {
+interface LoadResult {
   perSecond: number;
   p50: number;
   p95: number;

@@ -8,7 +8,7 @@ async function ask<T>(where: string): Promise<T> {
   return (await answer.json()) as T;
 }
 
-export async function mailsTo(address: string, subject: RegExp): Promise<Letter[]> {
+async function mailsTo(address: string, subject: RegExp): Promise<Letter[]> {
   const letters = await ask<Letter[]>(`/api/mails?to=${encodeURIComponent(address)}`);
   return letters.filter((letter) => subject.test(letter.subject));
 }

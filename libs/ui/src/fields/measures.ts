@@ -13,7 +13,7 @@ export function percentText(basisPoints: number): string {
   return String(Number((basisPoints / 100).toFixed(5)));
 }
 
-export interface DistanceUnit {
+interface DistanceUnit {
   readonly sign: 'mi' | 'km';
   readonly metres: number;
 }

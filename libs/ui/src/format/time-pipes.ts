@@ -1,6 +1,6 @@
 import { inject, Pipe, type PipeTransform } from '@angular/core';
 import { Reading } from './reading';
-import { clockText, dayText, instantText, minutesText, monthText } from './times';
+import { clockText, dayText, instantText, monthText } from './times';
 
 /** A trade day: `{{ visit.day | twDay }}`. */
 @Pipe({ name: 'twDay' })
@@ -35,13 +35,5 @@ export class ClockPipe implements PipeTransform {
   readonly #reading = inject(Reading);
   transform(instant: string | null | undefined): string {
     return instant ? clockText(instant, this.#reading.locale(), this.#reading.zone()) : '';
-  }
-}
-
-/** A length of time: `{{ job.minutes | twMinutes }}`. */
-@Pipe({ name: 'twMinutes' })
-export class MinutesPipe implements PipeTransform {
-  transform(minutes: number | null | undefined): string {
-    return minutes == null ? '' : minutesText(minutes);
   }
 }

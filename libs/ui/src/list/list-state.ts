@@ -12,13 +12,13 @@ export interface ListPage<T> {
 type Filters = Readonly<Record<string, string>>;
 
 /** What a load is asked for: exactly the query of a list operation, without what is not set. */
-export type ListAsk<S extends string, F extends Filters> = {
+type ListAsk<S extends string, F extends Filters> = {
   sort: S;
   cursor?: string;
   q?: string;
 } & { [K in keyof F]?: Exclude<F[K], ''> };
 
-export interface ListOptions<S extends string, F extends Filters> {
+interface ListOptions<S extends string, F extends Filters> {
   /** Sort keys of the operation with what they are called; the first is the one to begin with. */
   sorts: Readonly<Record<S, string>>;
   /** Filters at the start; '' is "any". */

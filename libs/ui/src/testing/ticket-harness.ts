@@ -1,6 +1,6 @@
 import { type BaseHarnessFilters, ComponentHarness, HarnessPredicate } from '@angular/cdk/testing';
 
-export interface TicketFilters extends BaseHarnessFilters {
+interface TicketFilters extends BaseHarnessFilters {
   stub?: string | RegExp;
   planned?: boolean;
 }

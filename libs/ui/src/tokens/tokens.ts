@@ -2,7 +2,7 @@
  * The colours of the look, in both schemes. `tokens.scss` carries the same values as custom
  * properties; a spec keeps the two equal, and a check tests every pair below for contrast.
  */
-export interface SchemePair {
+interface SchemePair {
   readonly light: string;
   readonly dark: string;
 }
@@ -48,7 +48,7 @@ const tints = [
 ] as const satisfies readonly Colour[];
 const inks = ['ink', 'soft', 'carbon', 'alarm', 'ochre'] as const satisfies readonly Colour[];
 
-export interface ContrastPair {
+interface ContrastPair {
   readonly text: Colour;
   readonly on: Colour;
   /** WCAG 2.2: 4.5 for text (1.4.3), 3 for what only outlines a control (1.4.11). */

@@ -6,7 +6,7 @@ type Condition = Pick<
   'id' | 'kind' | 'machine' | 'words' | 'extraMinutes' | 'tool'
 >;
 
-export interface ConditionWords {
+interface ConditionWords {
   readonly id: string;
   readonly hazard: boolean;
   readonly words: string;

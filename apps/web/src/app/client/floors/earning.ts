@@ -1,7 +1,7 @@
 import { type StoreSummary } from './floors-api';
 
 /** How many machines take money now, of how many: one that runs with a fault still earns. */
-export interface Earning {
+interface Earning {
   readonly earning: number;
   readonly all: number;
 }

@@ -7,7 +7,6 @@ import { Session } from '../../core/session/session';
 export type StoreSummary = AnswerOf<'stores.list'>['items'][number];
 export type MachineSummary = AnswerOf<'machines.list'>['items'][number];
 export type VisitItem = AnswerOf<'visits.list'>['items'][number];
-export type VisitShown = AnswerOf<'visits.show'>;
 export type Call = AnswerOf<'calls.list'>['items'][number];
 export type Balance = AnswerOf<'balances.list'>['items'][number];
 

@@ -1,7 +1,7 @@
 import { type CallItem } from './machines-api';
 
 /** A fault from its report to its end: the time the owner waited for the machine. */
-export interface Outage {
+interface Outage {
   readonly call: CallItem;
   readonly minutes: number;
 }

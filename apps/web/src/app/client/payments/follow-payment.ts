@@ -7,7 +7,7 @@ const lastPause = 15_000;
 /** After so many questions it is left to the server, which asks by itself. */
 const mostQuestions = 40;
 
-export interface Followed {
+interface Followed {
   readonly questions: number;
   /** What was answered; nothing when there was no answer. */
   readonly payment?: Payment;

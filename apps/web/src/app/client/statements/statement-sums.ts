@@ -2,7 +2,7 @@ import { type Bearer } from '@lib/contracts/web';
 import { counted } from '@lib/ui/words/words';
 import { type StatedVisit, type VisitLine } from './statements-api';
 
-export interface LineSums {
+interface LineSums {
   readonly list: number;
   readonly charged: number;
   /** Who bears them, each once, in the order they first come. */

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { PhotoView } from '../../core/photos/photo-view';
 
-export interface StripPhoto {
+interface StripPhoto {
   readonly id: string;
   readonly name: string;
 }

@@ -34,7 +34,7 @@ interface AnySent {
   upload?: FormData | Blob;
 }
 
-export interface CallRequest {
+interface CallRequest {
   readonly method: string;
   readonly url: string;
   readonly query: HttpParams;

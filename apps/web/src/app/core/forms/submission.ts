@@ -5,7 +5,7 @@ import { Intent } from '../api/intent';
 import { isProblem, type Problem, problemFrom } from '../api/problem';
 import { applyProblem } from './apply-problem';
 
-export interface SubmissionOptions<A> {
+interface SubmissionOptions<A> {
   done(answer: A): void;
   /** Sees a refusal first; true when it took care of it. */
   refused?(problem: Problem): boolean;

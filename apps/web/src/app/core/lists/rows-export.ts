@@ -16,7 +16,7 @@ export interface Column<T> {
   amount?(row: T): number | null | undefined;
 }
 
-export interface RowsToSave<T> {
+interface RowsToSave<T> {
   /** Of the file, without its ending. */
   readonly name: string;
   /** What the rows are, for the message: "statement". */

@@ -1,4 +1,4 @@
-export interface ServerEvent {
+interface ServerEvent {
   readonly event: string;
   readonly data: string;
 }

@@ -9,7 +9,7 @@ interface Schema {
   days: KeptDay;
   parts: KeptPart;
 }
-export type StoreName = keyof Schema;
+type StoreName = keyof Schema;
 
 const keys: Record<StoreName, string> = {
   acts: 'id',

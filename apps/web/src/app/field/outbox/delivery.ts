@@ -11,7 +11,7 @@ export interface Courier {
 }
 
 /** Who keeps what became of them. */
-export interface Keeper {
+interface Keeper {
   taken(ids: readonly string[]): Promise<void>;
   refused(ids: readonly string[], reason: string): Promise<void>;
 }

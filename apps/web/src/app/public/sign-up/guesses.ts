@@ -18,7 +18,7 @@ const currencyOfRegion: Readonly<Record<string, string>> = {
 };
 const euroRegions = 'AT BE CY DE EE ES FI FR GR HR IE IT LT LU LV MT NL PT SI SK'.split(' ');
 
-export interface Guesses {
+interface Guesses {
   readonly locale: string;
   readonly zone: string;
   readonly currency: string;

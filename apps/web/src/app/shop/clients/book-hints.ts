@@ -2,7 +2,7 @@ import { computed, inject, type Signal } from '@angular/core';
 import { moneyText, percentText, Reading } from '@lib/ui';
 import { type PriceBook } from '../price-book/price-book-api';
 
-export interface BookHints {
+interface BookHints {
   readonly normalPerHour: string;
   readonly afterHoursPerHour: string;
   readonly tripAmount: string;

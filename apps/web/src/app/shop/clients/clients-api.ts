@@ -3,7 +3,6 @@ import { type AnswerOf, type BodyOf, type QueryOf } from '@lib/contracts/web';
 import { Api } from '../../core/api/api';
 
 export type Client = AnswerOf<'clients.show'>;
-export type ClientSummary = AnswerOf<'clients.list'>['items'][number];
 export type ClientPerson = AnswerOf<'clientPeople.list'>['items'][number];
 export type Invitation = AnswerOf<'invitations.list'>['items'][number];
 type Versioned = Pick<Client, 'id' | 'version'>;

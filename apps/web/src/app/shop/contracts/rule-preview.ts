@@ -5,7 +5,7 @@ import { debounceTime } from 'rxjs';
 import { ContractsApi, type RulePreview as Meaning, type Terms } from './contracts-api';
 import { NextRounds } from './next-rounds';
 
-export interface RuleAsked {
+interface RuleAsked {
   readonly rule: string;
   readonly startsOn: string;
   readonly endsOn: string | null;

@@ -2,7 +2,7 @@ import { clockIn } from '../visits/clock-in';
 import { type VisitItem } from '../visits/visits-api';
 
 /** A visit placed on the line of the day, in percent of its length. */
-export interface PlacedVisit {
+interface PlacedVisit {
   readonly visit: VisitItem;
   readonly start: number;
   readonly width: number;

@@ -22,7 +22,7 @@ export function runStateWords({ state }: Pick<RunItem, 'state'>): string {
   }
 }
 
-export interface Bar {
+interface Bar {
   readonly label: string;
   readonly word: string;
   readonly done: number;

@@ -1,6 +1,6 @@
 import { type BookLine } from './book-lines';
 
-export interface ComparedLine extends BookLine {
+interface ComparedLine extends BookLine {
   /** What it was before; undefined when it stood like this, null when it was not there. */
   readonly before: string | null | undefined;
   /** It was there before and is not any more; `value` is empty. */

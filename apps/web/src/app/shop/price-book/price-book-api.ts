@@ -3,7 +3,6 @@ import { type AnswerOf, type BodyOf, type QueryOf } from '@lib/contracts/web';
 import { Api } from '../../core/api/api';
 
 export type Edition = AnswerOf<'editions.show'>;
-export type EditionSummary = AnswerOf<'editions.list'>['items'][number];
 export type PriceBook = Edition['book'];
 
 @Injectable({ providedIn: 'root' })

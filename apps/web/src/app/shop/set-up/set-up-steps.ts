@@ -1,6 +1,6 @@
 import { type SetUpFacts } from './set-up-facts';
 
-export interface SetUpStep {
+interface SetUpStep {
   readonly id: string;
   readonly title: string;
   /** Why it matters, or what comes of it. */

@@ -2,7 +2,7 @@ import { counted, minutesText, wordFor } from '@lib/ui';
 import { type Visit, type VisitAct } from './visits-api';
 
 /** One act of the record in a sentence, and the machine it is about. */
-export interface ActWords {
+interface ActWords {
   readonly bay: string | null;
   readonly words: string;
 }

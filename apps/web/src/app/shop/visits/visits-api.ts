@@ -6,7 +6,6 @@ export type Visit = AnswerOf<'visits.show'>;
 export type VisitItem = AnswerOf<'visits.list'>['items'][number];
 export type VisitJob = Visit['jobList'][number];
 export type VisitAct = AnswerOf<'acts.list'>['items'][number];
-export type DaySheet = AnswerOf<'visits.daySheet'>;
 type Versioned = Pick<Visit, 'id' | 'version'>;
 
 @Injectable({ providedIn: 'root' })
