@@ -9,12 +9,12 @@ import { type Config } from './core/config';
 import { readBody } from './core/http/body';
 import { checkRoutes } from './core/http/check-routes';
 import { health } from './core/http/health';
-import { serveMetrics, timeOperation } from './core/http/metrics';
+import { operationOf, serveMetrics, timeOperation } from './core/http/metrics';
 import { problemHandler } from './core/http/problem-handler';
 import { limitGuesses, limitRate, securityHeaders } from './core/http/security';
 import { serveRoute } from './core/http/serve-route';
 import { webFiles } from './core/http/web-files';
-import { type Log } from './core/logging';
+import { type Log, plainError } from './core/logging';
 import { notFound } from './core/problems/problem';
 import { stripeWebhook } from './features/payments/stripe-webhook';
 import { routes } from './routes';
@@ -35,11 +35,18 @@ export function createApp(config: Config, log: Log): Express {
     pinoHttp({
       logger: log,
       genReqId: () => randomUUID(),
-      // The path may hold ids and mailed tokens: the operation is logged instead.
+      // The path may hold ids and mailed tokens: the operation is logged instead of it.
       serializers: {
         req: (req: { id: unknown; method: string }) => ({ id: req.id, method: req.method }),
+        res: (res: { statusCode: number }) => ({ status: res.statusCode }),
+        err: plainError,
       },
-      customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? 'error' : 'debug'),
+      wrapSerializers: false,
+      customProps: (_req, res) => ({ operation: operationOf(res) }),
+      customLogLevel: (_req, res, error) => {
+        if (error || res.statusCode >= 500) return 'error';
+        return operationOf(res) ? 'info' : 'debug';
+      },
     }),
   );
   app.use(securityHeaders());

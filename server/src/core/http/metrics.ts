@@ -31,11 +31,18 @@ export function serveMetrics(): RequestHandler {
   };
 }
 
-/** Times one operation. */
+/** Times one operation, and notes which one it is for the log. */
 export function timeOperation(operation: string): RequestHandler {
   return (_request, response, next) => {
+    response.locals.operation = operation;
     const stop = metrics.requestSeconds.startTimer({ operation });
     response.on('finish', () => stop({ status: response.statusCode }));
     next();
   };
+}
+
+/** The operation that an answer is of; undefined for files and what is not there. */
+export function operationOf(response: object): string | undefined {
+  const { locals } = response as { locals?: { operation?: string } };
+  return locals?.operation;
 }
