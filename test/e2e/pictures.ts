@@ -127,11 +127,12 @@ const pictures: Picture[] = [
     path: '/client/home',
   },
   {
-    name: 'platform-shops',
+    name: 'platform-shop',
     as: admin,
     screen: 'desktop',
     scheme: 'light',
     path: '/platform/shops',
+    then: openFirstRow,
   },
   { name: 'public-sign-in', as: '', screen: 'phone', scheme: 'light', path: '/sign-in' },
 ];
