@@ -38,11 +38,19 @@ const taxRate = z.strictObject({
 
 const warrantyDays = z.int().min(0).max(3650);
 
+/** Of parts, with a warranty of their own. */
+const mostCategories = 200;
+
 /** What the shop promises, and what it wants to look at itself. */
 export const warrantyRules = z.strictObject({
   labourDays: warrantyDays,
   partDays: warrantyDays,
-  partDaysByCategory: z.record(line(40), warrantyDays),
+  partDaysByCategory: z
+    .record(line(40), warrantyDays)
+    .refine((days) => Object.keys(days).length <= mostCategories, {
+      error: `names at most ${mostCategories} categories`,
+    })
+    .meta({ maxProperties: mostCategories }),
   /** Causes the store bears even within warranty. */
   excludedCauses: z.array(cause).max(9),
   /** Days within which a return for the same fault is the shop's own; 0 for none. */
