@@ -37,6 +37,11 @@ export interface StackOptions {
 type PortName = 'web' | 'worker' | 'mailbox' | 'smtp' | 'stripe';
 const portNames: readonly PortName[] = ['web', 'mailbox', 'stripe', 'smtp', 'worker'];
 
+/** Where we reach what listens on HOST: on this machine, unless it listens on one address only. */
+function reachedAt(host: string | undefined): string {
+  return !host || host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
+}
+
 /** The whole application on this machine: database, fakes, web process and worker. */
 export class Stack {
   cluster: Cluster | undefined;
@@ -210,7 +215,7 @@ export class Stack {
       this.stripe = await startStripeFake({
         port: ports.stripe,
         dataFile: path.join(this.dataDir, 'stripe.jsonl'),
-        webhookUrl: `http://127.0.0.1:${ports.web}/api/stripe/webhook`,
+        webhookUrl: `http://${reachedAt(process.env.HOST)}:${ports.web}/api/stripe/webhook`,
         webhookSecret: localSecrets(this.dataDir).stripeWebhookSecret,
       });
       // Nobody listens yet: what the demo pays is told once the web process is there.
@@ -229,7 +234,7 @@ export class Stack {
       ...Object.fromEntries(fromOutside),
       PORT: String(ports.web),
       WORKER_PORT: String(ports.worker),
-      PUBLIC_URL: process.env.PUBLIC_URL ?? `http://127.0.0.1:${ports.web}`,
+      PUBLIC_URL: process.env.PUBLIC_URL ?? `http://${reachedAt(process.env.HOST)}:${ports.web}`,
       DATABASE_OWNER_URL: this.urls.ownerUrl,
       DATABASE_APP_URL: this.urls.appUrl,
       DATABASE_PLATFORM_URL: this.urls.platformUrl,
@@ -258,8 +263,9 @@ export class Stack {
   private describeServices(ports: Record<PortName, number>, all: Record<string, string>): void {
     // The owner's address is for migrating; what serves requests must not have it.
     const { DATABASE_OWNER_URL: _, ...env } = all;
-    this.webUrl = `http://127.0.0.1:${ports.web}`;
-    this.workerUrl = `http://127.0.0.1:${ports.worker}`;
+    const host = reachedAt(env.HOST);
+    this.webUrl = `http://${host}:${ports.web}`;
+    this.workerUrl = `http://${host}:${ports.worker}`;
     const service = (name: 'web' | 'worker', file: string, url: string): Service =>
       new Service({
         name,
