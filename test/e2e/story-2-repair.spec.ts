@@ -39,7 +39,10 @@ async function tickCautions(tech: Visitor): Promise<void> {
   await tech.sees(/Before covers come off: all \d+ ticked/);
 }
 
-async function record(tech: Visitor, found: Found): Promise<void> {
+async function record(tech: Visitor, bay: string, found: Found): Promise<void> {
+  await tech.press(`Work on ${bay}`);
+  await tech.heading(bay);
+  await tickCautions(tech);
   await tech.fill('What you found', found.finding);
   await tech.choose('How it failed', found.code);
   await tech.fill('What failed', found.category);
@@ -48,6 +51,13 @@ async function record(tech: Visitor, found: Found): Promise<void> {
   await tech.fill('Full cycles', '1');
   await tech.fill('Coins put in', '8');
   await tech.fill('Work', String(found.minutes));
+}
+
+async function addPart(tech: Visitor, sought: string, found: RegExp): Promise<void> {
+  await tech.press('Add a part');
+  await tech.fill('Search the price book', sought);
+  await tech.press(found);
+  await tech.press('Add the part');
 }
 
 test('one visit: a blocked valve, nothing found, and our own mistake', async ({
@@ -83,10 +93,7 @@ test('one visit: a blocked valve, nothing found, and our own mistake', async ({
   });
 
   await test.step('the first machine: a valve blocked with grit', async () => {
-    await tech.press('Work on A-02');
-    await tech.heading('A-02');
-    await tickCautions(tech);
-    await record(tech, {
+    await record(tech, 'A-02', {
       finding: 'Inlet valve blocked with grit',
       code: 'blocked',
       category: 'valve',
@@ -94,10 +101,7 @@ test('one visit: a blocked valve, nothing found, and our own mistake', async ({
       action: 'Valve fitted, fill timed',
       minutes: 30,
     });
-    await tech.press('Add a part');
-    await tech.fill('Search the price book', 'inlet valve');
-    await tech.press(/Inlet valve, double/);
-    await tech.press('Add the part');
+    await addPart(tech, 'inlet valve', /Inlet valve, double/);
     await tech.sees('from the van');
     const chooser = tech.page.waitForEvent('filechooser');
     await tech.press('From the phone');
@@ -124,10 +128,7 @@ test('one visit: a blocked valve, nothing found, and our own mistake', async ({
     await tech.heading(store);
     await tech.told('No signal. What you record is kept here');
     await tech.page.getByRole('gridcell', { name: /^A-05/ }).click();
-    await tech.press('Work on A-05');
-    await tech.heading('A-05');
-    await tickCautions(tech);
-    await record(tech, {
+    await record(tech, 'A-05', {
       finding: 'Door lock burnt, the door hangs crooked',
       code: 'burnt',
       category: 'door',
@@ -135,10 +136,7 @@ test('one visit: a blocked valve, nothing found, and our own mistake', async ({
       action: 'Door lock fitted, hinge set straight',
       minutes: 35,
     });
-    await tech.press('Add a part');
-    await tech.fill('Search the price book', 'door lock');
-    await tech.press(/Door lock/);
-    await tech.press('Add the part');
+    await addPart(tech, 'door lock', /Door lock/);
     await tech.fill('Why', 'We fitted the hinge crooked, the lock took the load.');
     await tech.page
       .getByRole('radio', { name: /A-05: Hinge fitted/ })
