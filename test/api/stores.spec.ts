@@ -1,6 +1,8 @@
+import { write } from '../../server/src/core/database/tenancy';
 import { api } from '../support/api';
 import { type TestServer } from '../support/app';
 import {
+  buildBank,
   buildClient,
   buildLaundry,
   buildMachine,
@@ -8,6 +10,7 @@ import {
   buildShop,
   buildStore,
   insert,
+  inShop,
   type TestShop,
 } from '../support/factories';
 import { limitPlan } from '../support/plans';
@@ -108,6 +111,35 @@ describe('stores', () => {
       expect((await attendant.call(id, { params: { storeId } })).status).toBe(200);
       expect((await attendant.call(id, { params: { storeId: sister } })).status).toBe(404);
     }
+    // Nor do the counts of the client tell of its other stores, or the client of its terms.
+    await insert(shop, 'machines', {
+      client_id: clientId,
+      store_id: sister,
+      bank_id: await buildBank(shop, { client_id: clientId, store_id: sister }),
+      bay: 'A-01',
+      bay_number: 1,
+      kind: 'dryer',
+      state: 'down',
+      sticker_code: 'SISTER',
+    });
+    await inShop(shop, () =>
+      write(
+        `update clients set terms_days = 9, tax_exempt = true, tax_exempt_reference = 'T-9'
+         where shop_id = $shopId and id = $clientId`,
+        { shopId: shop.id, clientId },
+      ),
+    );
+    const seen = await attendant.call('clients.show', { params: { clientId } });
+    expect(seen.body).toMatchObject({
+      stores: 1,
+      machines: 1,
+      machinesNotUp: 0,
+      termsDays: null,
+      taxExempt: false,
+      taxExemptReference: '',
+    });
+    const [listed] = (await attendant.call('clients.list')).body.items;
+    expect(listed).toMatchObject({ stores: 1, machines: 1, machinesNotUp: 0 });
   });
 
   it('list by client, search in address and client, and page without gap or double', async () => {

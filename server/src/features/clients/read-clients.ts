@@ -11,7 +11,7 @@ export function listClients(
   query: InputOf<'clients.list'>['query'],
 ): Promise<AnswerOf<'clients.list'>> {
   return withTenant(context, () => {
-    const bind: Bind = { shopId: context.shopId };
+    const bind: Bind = { shopId: context.shopId, ownStoreId: context.storeId };
     return page<ClientRow, AnswerOf<'clients.list'>['items'][number]>(
       {
         select: `select ${clientColumns} from clients c`,
@@ -36,7 +36,7 @@ export function showClient(context: Context, clientId: string): Promise<AnswerOf
   return withTenant(context, async () => {
     const client = await row<ClientRow>(
       `select ${clientColumns} from clients c where c.shop_id = $shopId and c.id = $clientId`,
-      { shopId: context.shopId, clientId },
+      { shopId: context.shopId, clientId, ownStoreId: context.storeId },
     );
     return presentClient(context, found(client));
   });
