@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
-import { MatFormField, MatLabel } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
+import { type Choice, ChoiceFilter } from '@lib/ui';
 
 /** The filter of things that can end: '' is those that stand. */
 export type Shown = '' | 'ended' | 'all';
@@ -10,35 +9,31 @@ interface Showing {
   filterBy(name: 'show', value: Shown): void;
 }
 
+const others: readonly Choice<Shown>[] = [
+  { value: 'ended', label: 'Ended' },
+  { value: 'all', label: 'All' },
+];
+
 @Component({
   selector: 'tw-show-filter',
-  imports: [MatFormField, MatInput, MatLabel],
+  imports: [ChoiceFilter],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <mat-form-field subscriptSizing="dynamic">
-      <mat-label>Show</mat-label>
-      <select matNativeControl [value]="list().filters().show" (change)="choose($event)">
-        <option value="">Current</option>
-        <option value="ended">Ended</option>
-        <option value="all">All</option>
-      </select>
-    </mat-form-field>
+    <tw-choice-filter
+      label="Show"
+      any="Current"
+      [options]="others"
+      [value]="list().filters().show"
+      (chosen)="list().filterBy('show', $any($event))"
+    />
   `,
   styles: `
     :host {
-      flex: 2 1 8.5rem;
-      min-inline-size: 0;
-      max-inline-size: 13rem;
-    }
-    mat-form-field {
-      inline-size: 100%;
+      display: contents;
     }
   `,
 })
 export class ShowFilter {
   readonly list = input.required<Showing>();
-
-  protected choose(event: Event): void {
-    this.list().filterBy('show', (event.target as HTMLSelectElement).value as Shown);
-  }
+  protected readonly others = others;
 }
