@@ -22,6 +22,7 @@ export {
 export * from './ledger/settlement-postings';
 export * from './ledger/trial-balance';
 export * from './words/document-name';
+export * from './words/found-and-done';
 export * from './words/symptoms';
 export * from './words/trade';
 export {

@@ -1,6 +1,7 @@
 import {
   decimalFromAmount,
   formatMoney,
+  foundAndDone,
   minorDigits,
   printedRfReference,
   type StatementLine,
@@ -203,7 +204,7 @@ function* visitRows(
     ],
   });
   for (const job of visit.jobs) {
-    const story = [job.found || job.reported, job.done].filter((part) => part !== '').join('; ');
+    const story = foundAndDone(job.found || job.reported, job.done);
     yield row(`${job.bay}: ${story || 'looked at'}.`);
     for (const line of job.lines.filter(
       ({ bearer }) => bearer === 'shop' || bearer === 'goodwill',

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { ticketName } from '@lib/domain/words/document-name';
+import { foundAndDone } from '@lib/domain/words/found-and-done';
 import { MoneyText } from '@lib/ui/format/money-text';
 import { BearerLabel } from '@lib/ui/notes/bearer-label';
 import { TicketCard } from '@lib/ui/ticket/ticket-card';
@@ -42,7 +43,6 @@ export class StatedVisit {
 }
 
 function wordsOf({ found, done, reported, result }: Visit['jobs'][number]): string {
-  if (result === 'nothing_found')
-    return [found || 'Nothing found', done].filter(Boolean).join('; ');
-  return [found || labelFor(reported), done].filter(Boolean).join('; ');
+  const otherwise = result === 'nothing_found' ? 'Nothing found' : labelFor(reported);
+  return foundAndDone(found || otherwise, done);
 }

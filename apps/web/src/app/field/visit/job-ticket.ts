@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
+import { foundAndDone } from '@lib/domain';
 import { labelFor, minutesText, TicketCard, wordFor } from '@lib/ui';
 import { type SheetJob } from '../kept/kept';
 import { FieldVisit } from '../sheets/field-visit';
@@ -48,7 +49,7 @@ export class JobTicket {
   });
   protected readonly line = computed(() => {
     const { finding, action, result } = this.job();
-    const said = [finding, action].filter(Boolean).join('; ');
+    const said = foundAndDone(finding, action);
     if (result === 'nothing_found') return said || 'Nothing found when tested';
     return said || (result ? labelFor(wordFor(result)) : 'Nothing written yet');
   });

@@ -40,7 +40,7 @@ import { TrialBalanceTable } from './trial-balance';
     <tw-entry-list />
     <tw-section-head
       heading="Journal"
-      sub="A plain-text journal that accounting programs read, as hledger and ledger do."
+      sub="A plain-text journal that programs for bookkeeping read."
     />
     <form class="journal" [formGroup]="span" (ngSubmit)="download()">
       <tw-text-field label="From" type="date" [control]="span.controls.from" />

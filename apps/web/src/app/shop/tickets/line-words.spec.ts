@@ -22,7 +22,7 @@ describe('a ticket in words', () => {
 
   it('says what was found and done', () => {
     expect(jobWords(job({ finding: 'Valve blocked', action: 'Valve fitted' }))).toBe(
-      'Valve blocked; Valve fitted',
+      'Valve blocked. Valve fitted',
     );
     expect(jobWords(job({ result: 'nothing_found', action: 'ignored' }))).toBe('Nothing found');
     expect(jobWords(job({ cause: 'shop_error' }))).toBe('our own mistake');

@@ -1,3 +1,4 @@
+import { foundAndDone } from '@lib/domain';
 import { minutesText, wordFor } from '@lib/ui';
 import { type TicketJob, type TicketLine } from './tickets-api';
 
@@ -10,8 +11,7 @@ export function quantityWords({ unit, quantityMilli }: TicketLine): string {
 /** What was found and done on a machine, in one line. */
 export function jobWords({ finding, action, cause, result }: TicketJob): string {
   if (result === 'nothing_found') return finding || 'Nothing found';
-  const words = [finding, action].filter(Boolean).join('; ');
-  return words || wordFor(cause ?? result ?? '');
+  return foundAndDone(finding, action) || wordFor(cause ?? result ?? '');
 }
 
 /** "3 machines, one trip" */
