@@ -62,6 +62,7 @@ export async function main(): Promise<void> {
     demo: true,
     durable: true,
     port: port + 1,
+    front: web.url,
     env: { PUBLIC_URL: web.url, NODE_ENV: 'development', LOG_LEVEL: 'info' },
     commands: { web: watched('server/src/main.ts'), worker: watched('server/src/worker.ts') },
     notice: (words) => progress.say(words),
@@ -69,7 +70,7 @@ export async function main(): Promise<void> {
   await runAtKeyboard(stack, async () => {
     await buildServer(progress);
     await stack.start();
-    progress.say(greeting({ ...stack.runFile(), web: web.url }, dataDir));
+    progress.say(greeting(stack.runFile(), dataDir));
     web.start(stack.webUrl);
   }, [web]);
 }

@@ -30,6 +30,8 @@ export interface StackOptions {
   /** Commands instead of the built ones: `npm run dev` has others. */
   commands?: Partial<Record<'web' | 'worker', readonly [string, ...string[]]>>;
   webDir?: string;
+  /** Where people reach the web application when something stands before it. */
+  front?: string;
   /** Told when something died and was started again, or could not be. */
   notice?: (words: string) => void;
 }
@@ -130,7 +132,7 @@ export class Stack {
 
   runFile(): RunFile {
     return {
-      web: this.webUrl,
+      web: this.options.front ?? this.webUrl,
       mailbox: this.mailbox?.url ?? null,
       stripe: this.stripe?.url ?? null,
       worker: this.workerUrl,
