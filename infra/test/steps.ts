@@ -51,9 +51,13 @@ export function lint(): Promise<Tally> {
 }
 
 export function types(): Promise<Tally> {
-  const memory = ['--incremental', '--tsBuildInfoFile', 'node_modules/.cache/tsc-node.json'];
+  const tsc = (project: string, memory: string) => {
+    const file = `node_modules/.cache/${memory}.json`;
+    return ['typescript/bin/tsc', '-p', project, '--incremental', '--tsBuildInfoFile', file];
+  };
   return check('Types', [
-    ['typescript/bin/tsc', '-p', 'tsconfig.node.json', ...memory],
+    tsc('tsconfig.node.json', 'tsc-node'),
+    tsc('apps/web/tsconfig.types.json', 'tsc-web-specs'),
     [
       '@angular/compiler-cli/bundles/src/bin/ngc.js',
       '-p',

@@ -32,7 +32,7 @@ describe('PhotosHead', () => {
 
   it('names the photo that was refused', async () => {
     const { added, page } = await choosing(
-      new Problem('invalid', 422, 'Refused', 'That is no photo.'),
+      new Problem('invalid-request', 422, 'Refused', 'That is no photo.'),
     );
     expect(added).not.toHaveBeenCalled();
     expect(page.querySelector('[role=alert]')?.textContent).toBe(

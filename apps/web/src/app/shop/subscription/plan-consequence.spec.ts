@@ -26,7 +26,7 @@ describe('planConsequence', () => {
   });
 
   it('says that a card is asked for when nothing is paid yet', () => {
-    const present = { state: 'trialing', usage: [], plan: workshop } as const;
+    const present = { state: 'trialing' as const, usage: [], plan: workshop };
     expect(planConsequence(present, bench, money)).toBe(
       '$49 a month. You give a card on the next page.',
     );
