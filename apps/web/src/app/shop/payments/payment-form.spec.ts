@@ -47,7 +47,13 @@ describe('PaymentForm', () => {
 
   it('shows at the field what the server refuses, and keeps what was typed', async () => {
     const errors = [{ pointer: '/receivedOn', detail: 'is in the future' }];
-    const refusal = new Problem('invalid-request', 422, 'Some fields are not right', undefined, errors);
+    const refusal = new Problem(
+      'invalid-request',
+      422,
+      'Some fields are not right',
+      undefined,
+      errors,
+    );
     const { api, page } = await opened(refusal);
     await page.fill('Note', 'Cheque 1123');
     await page.press('Record the payment');
