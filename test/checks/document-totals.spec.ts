@@ -5,10 +5,12 @@
  * Amounts here are cents; the published ones are in whole currency.
  */
 import {
+  billTicket,
   brokenTotalRules,
   type DocumentLine,
   documentTotals,
   type DocumentToTotal,
+  type LineKind,
   type TaxCategory,
 } from '@lib/domain';
 
@@ -199,5 +201,54 @@ describe('documentTotals', () => {
     expect(totals).toMatchObject({ allowances: 0, charges: 0, ...figures });
     expect(totals.categories.map(({ base, tax }) => [base, tax])).toEqual(categories);
     expect(brokenTotalRules(totals)).toEqual([]);
+  });
+});
+
+/** The same amounts as lines of a ticket, allowances and charges of the document among them. */
+function ticketOf(document: DocumentToTotal, lineNets: readonly number[]) {
+  const { lines, allowances = [], charges = [] } = document;
+  const amounts = [
+    ...lines.map(({ category }, i) => ({ amount: lineNets[i] ?? 0, category })),
+    ...allowances.map(({ amount, category }) => ({ amount: -amount, category })),
+    ...charges,
+  ];
+  // A ticket is taxed by the kind of its lines: one kind stands for each category.
+  const kinds: LineKind[] = ['trip', 'labour', 'access', 'part'];
+  const codes = [...new Set(amounts.map(({ category }) => category))];
+  const kindOf = (category: TaxCategory) => kinds[codes.indexOf(category)] as LineKind;
+  return billTicket({
+    lines: amounts.map(({ amount, category }) => ({
+      kind: kindOf(category),
+      bearer: 'store' as const,
+      list: amount,
+      cost: 0,
+    })),
+    taxRates: codes.map((category) => ({
+      place: '',
+      kind: kindOf(category),
+      basisPoints: category.basisPoints,
+      validFrom: '2000-01-01',
+    })),
+    place: '',
+    on: '2031-05-15',
+    exemption: null,
+    rounding: 'invoice',
+  });
+}
+
+describe('a ticket, taxed by invoice', () => {
+  it.each(invoices)('%s', (_, document, published) => {
+    const { lines, totals } = ticketOf(document, published.lineNets);
+    expect(totals).toMatchObject({
+      net: published.withoutTax,
+      tax: published.tax,
+      total: published.withTax,
+    });
+    const taxed = (pairs: readonly (readonly [number, number])[]) =>
+      pairs.filter(([, tax]) => tax !== 0);
+    expect(taxed(totals.categories.map(({ base, tax }) => [base, tax] as const))).toEqual(
+      taxed(published.categories),
+    );
+    expect(lines.reduce((sum, line) => sum + line.tax, 0)).toBe(published.tax);
   });
 });

@@ -1,7 +1,7 @@
 import { addUp } from '../money/amount';
 import { type Exemption, type TaxRate, type TaxRounding } from '../tax/rate';
 import { isExempt, rateFor, taxByLine } from '../tax/tax';
-import { type CategoryTotal } from '../totals/document-totals';
+import { type CategoryTotal, documentTotals } from '../totals/document-totals';
 import { type Bearer, type LineKind } from '../words/trade';
 
 /** What a line must have to stand on a ticket; whatever else it carries stays with it. */
@@ -57,7 +57,8 @@ export interface BilledTicket<Line extends LineToBill> {
 /**
  * A ticket's lines charged and taxed, and totals that are the sums of these lines: `list` is `net`
  * plus everything absorbed, `total` is `net` plus `tax`, and every tax of a category is that of
- * its lines.
+ * its lines. Rounded by invoice, they are the totals of EN 16931-1; rounded by line, the standard
+ * has none, and a category's tax is the sum of its lines'.
  *
  * @throws RangeError for amounts that are not safe integers, or a bad tax rate
  */
@@ -72,8 +73,10 @@ export function billTicket<Line extends LineToBill>(
     taxBasisPoints: charges[i]?.basisPoints ?? 0,
     tax: taxes[i] ?? 0,
   }));
-  const net = addUp(lines.map((line) => line.charged));
-  const tax = addUp(taxes);
+  const categories =
+    ticket.rounding === 'line' ? categoriesByLine(charges, taxes) : categoriesByInvoice(charges);
+  const net = addUp(categories.map((category) => category.base));
+  const tax = addUp(categories.map((category) => category.tax));
   return {
     lines,
     totals: {
@@ -83,9 +86,7 @@ export function billTicket<Line extends LineToBill>(
       net,
       tax,
       total: addUp([net, tax]),
-      categories: categoriesOf(
-        charges.map((charge, i) => ({ ...charge, base: charge.amount, tax: taxes[i] ?? 0 })),
-      ),
+      categories,
     },
   };
 }
@@ -107,16 +108,23 @@ function chargeFor(line: LineToBill, ticket: TicketToBill<LineToBill>): Charge {
   return { amount: line.list, basisPoints, code: basisPoints === 0 ? 'Z' : 'S' };
 }
 
-function categoriesOf(charges: readonly (Charge & { base: number; tax: number })[]) {
+function categoriesByInvoice(charges: readonly Charge[]): CategoryTotal[] {
+  const lines = charges.flatMap(({ code, basisPoints, amount }) =>
+    code ? [{ quantityMilli: 1000, unitPrice: amount, category: { code, basisPoints } }] : [],
+  );
+  return documentTotals({ lines }).categories;
+}
+
+function categoriesByLine(charges: readonly Charge[], taxes: readonly number[]): CategoryTotal[] {
   const categories = new Map<string, CategoryTotal>();
-  for (const { code, basisPoints, base, tax } of charges) {
+  for (const [i, { code, basisPoints, amount }] of charges.entries()) {
     if (!code) continue;
     const key = `${code} ${basisPoints}`;
     const known = categories.get(key) ?? { code, basisPoints, base: 0, tax: 0 };
     categories.set(key, {
       ...known,
-      base: addUp([known.base, base]),
-      tax: addUp([known.tax, tax]),
+      base: addUp([known.base, amount]),
+      tax: addUp([known.tax, taxes[i] ?? 0]),
     });
   }
   return [...categories.values()];
