@@ -6,6 +6,7 @@ import { api } from '../support/api';
 import { startTestServer, type TestServer } from '../support/app';
 import {
   buildClient,
+  buildLaundry,
   buildPerson,
   buildShop,
   type TestPerson,
@@ -91,6 +92,20 @@ describe('what changes in the shop', () => {
     expect(inShop.heard()).not.toContain('Secret');
     expect(ofOther.heard()).not.toContain(mine);
     expect(elsewhere.heard()).not.toContain(mine);
+  });
+
+  it('reaches an attendant without the ids of their client’s other stores', async () => {
+    const person = await buildPerson(shop, 'office');
+    const { clientId, storeId } = await buildLaundry(shop);
+    const attendant = await follow(await buildPerson(shop, 'attendant', { clientId, storeId }));
+    await until(() => attendant.heard().includes('following'));
+    const other = await api(server.app, person.token).call('stores.create', {
+      body: { clientId, name: 'Other Street', address: '1 Other Street' },
+    });
+    expect(other.status).toBe(201);
+    await until(() => attendant.heard().includes('event: stores\n'));
+    expect(attendant.heard()).toContain('data: {"kind":"stores","id":null}');
+    expect(attendant.heard()).not.toContain((other.body as { id: string }).id);
   });
 
   it('is told when it is done, not when it fails', async () => {

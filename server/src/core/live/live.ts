@@ -90,9 +90,9 @@ export function followChanges(context: Context, response: Response): void {
   const onChange = (event: LiveEvent) => {
     if (event.shopId !== context.shopId) return;
     if (context.clientId && event.clientId !== context.clientId) return;
-    response.write(
-      `event: ${event.kind}\ndata: ${JSON.stringify({ kind: event.kind, id: event.id })}\n\n`,
-    );
+    // An attendant knows one store of the client: what changed in which other is not told.
+    const id = context.storeId ? null : event.id;
+    response.write(`event: ${event.kind}\ndata: ${JSON.stringify({ kind: event.kind, id })}\n\n`);
   };
   const beat = setInterval(() => response.write(': still here\n\n'), 20_000);
   const end = setTimeout(() => response.end(), longestStream).unref();

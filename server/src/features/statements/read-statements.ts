@@ -9,6 +9,7 @@ import { page, searched, type SortKey } from '../../core/lists/keyset';
 import { found, problem } from '../../core/problems/problem';
 import { shopFacts } from '../../core/shop-facts';
 import { toPayUpTo } from '../receivables/to-pay';
+import { ownClient } from '../stores/own-store';
 import {
   openOfStatement,
   presentStatement,
@@ -39,7 +40,11 @@ export function listStatements(
   return withTenant(context, async () => {
     const today = tradeDayOf(context.now, (await shopFacts(context)).zone);
     const bind: Bind = { shopId: context.shopId };
-    const where = ['s.shop_id = $shopId', ...searched(query.q, ['t.name', 'c.name'], bind)];
+    const where = [
+      's.shop_id = $shopId',
+      ...ownClient(context, 's.client_id', bind),
+      ...searched(query.q, ['t.name', 'c.name'], bind),
+    ];
     const filter = (value: string | undefined, name: string, condition: string) => {
       if (value === undefined) return;
       bind[name] = value;

@@ -32,12 +32,15 @@ export const statementFrom = `statements s
   join stores t on t.shop_id = s.shop_id and t.id = s.store_id
   join clients c on c.shop_id = s.shop_id and c.id = s.client_id`;
 
+/** With a limit, because PostgreSQL would otherwise read all attachments of the shop for a page. */
+const hasPdf = `(select true from attachments f where f.shop_id = s.shop_id
+  and f.owner_kind = 'statement' and f.owner_id = s.id limit 1) is true`;
+
 export const statementColumns = `s.id, s.number, s.store_id as "storeId", t.name as "storeName",
   s.client_id as "clientId", c.name as "clientName", s.month, s.issued_on as "issuedOn",
   s.due_on as "dueOn", s.currency, s.opening, s.charged, s.tax, s.paid,
   s.borne_by_shop as "borneByShop", s.closing, ${openOfStatement} as open,
-  exists (select 1 from attachments f where f.shop_id = s.shop_id
-    and f.owner_kind = 'statement' and f.owner_id = s.id) as "pdfReady"`;
+  ${hasPdf} as "pdfReady"`;
 
 export function presentStatement(statement: StatementRow, today: string): StatementItem {
   const { open, dueOn } = statement;
