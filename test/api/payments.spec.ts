@@ -149,6 +149,21 @@ describe('payments', () => {
     );
   });
 
+  it('gives the same page also after the store was given another name', async () => {
+    const first = await start();
+    const whole = { storeId: store.storeId, amount: 5_000 };
+    const second = await start(whole);
+    await inShop(shop, () =>
+      rows('update stores set name = $name where shop_id = $shopId and id = $storeId', {
+        shopId: shop.id,
+        storeId: store.storeId,
+        name: 'Another name',
+      }),
+    );
+    expect(await start()).toEqual(first);
+    expect(await start(whole)).toEqual(second);
+  });
+
   it.each(['twice', 'reversed'] as const)('posts once when events come %s', async (mode) => {
     fake.setWebhookMode(mode);
     const { paymentId, url } = await start();

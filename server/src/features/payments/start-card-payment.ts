@@ -75,6 +75,7 @@ interface WhatIsPaid {
   storeId: string;
   statementId: string | null;
   dueOn: string;
+  /** Of what never changes: under the same key, the card payment service takes only the same words. */
   title: string;
 }
 
@@ -82,8 +83,9 @@ async function whatIsPaid(context: Context, body: Body): Promise<WhatIsPaid> {
   if (body.statementId !== undefined) {
     const statement = found(
       await row<{ storeId: string; dueOn: string; number: number; storeName: string }>(
-        `select s.store_id as "storeId", s.due_on as "dueOn", s.number, t.name as "storeName"
-         from statements s join stores t on t.shop_id = s.shop_id and t.id = s.store_id
+        `select s.store_id as "storeId", s.due_on as "dueOn", s.number,
+           s.snapshot -> 'store' ->> 'name' as "storeName"
+         from statements s
          where s.shop_id = $shopId and s.id = $statementId`,
         { shopId: context.shopId, statementId: body.statementId },
       ),
@@ -96,12 +98,12 @@ async function whatIsPaid(context: Context, body: Body): Promise<WhatIsPaid> {
     };
   }
   const store = found(
-    await row<{ id: string; name: string }>(
-      'select id, name from stores where shop_id = $shopId and id = $storeId',
-      { shopId: context.shopId, storeId: body.storeId },
-    ),
+    await row<{ id: string }>('select id from stores where shop_id = $shopId and id = $storeId', {
+      shopId: context.shopId,
+      storeId: body.storeId,
+    }),
   );
-  return { storeId: store.id, statementId: null, dueOn: '', title: `Balance of ${store.name}` };
+  return { storeId: store.id, statementId: null, dueOn: '', title: 'Open balance' };
 }
 
 interface Key {
