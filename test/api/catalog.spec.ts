@@ -115,6 +115,7 @@ describe('the schema keeps tenants apart', () => {
       'plans',
       'platform_audit',
       'platform_mails',
+      'recovery_codes',
       'refresh_tokens',
       'sessions',
       'shop_usage',

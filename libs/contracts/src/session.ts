@@ -5,6 +5,12 @@ import { email, id, line, password, token } from './text';
 import { currency, instant, locale, zone } from './values';
 
 const oneTimeCode = z.string().regex(/^\d{6}$/, { error: 'is six digits' });
+/** What proves a sign-in beside the password: a one-time code, or a recovery code as people type it. */
+const proof = z.string().regex(/^\s{0,4}(\d{6}|[0-9A-Za-z]{5}[\s-]?[0-9A-Za-z]{5})\s{0,4}$/, {
+  error: 'is neither six digits nor a recovery code',
+});
+/** Shown this once: the server keeps nothing it could show them from again. */
+const recoveryCodes = z.object({ recoveryCodes: z.array(z.string()) });
 
 export const membership = z.object({
   id,
@@ -53,7 +59,7 @@ export const sessionOperations = defineOperations({
     body: z.strictObject({
       email,
       password: z.string().min(1).max(128),
-      code: oneTimeCode.optional(),
+      code: proof.optional(),
     }),
     answer: session,
     status: 200,
@@ -166,6 +172,7 @@ export const accountOperations = defineOperations({
       oneTimeCodes: z.boolean(),
       /** Whether this person may use one-time codes: shop owners and platform admins. */
       oneTimeCodesOffered: z.boolean(),
+      recoveryCodesLeft: z.int(),
       version: z.int(),
     }),
   },
@@ -199,19 +206,32 @@ export const accountOperations = defineOperations({
   'account.confirmTotp': {
     method: 'POST',
     path: '/api/account/totp/confirm',
-    summary: 'Put one-time codes in force with a first code',
+    summary: 'Put one-time codes in force with a first code; answers with the recovery codes',
     permission: 'signed-in',
     idempotency: 'natural',
     body: z.strictObject({ code: oneTimeCode }),
+    answer: recoveryCodes,
+    status: 200,
     problems: ['conflict', 'sign-in-refused'],
   },
   'account.removeTotp': {
     method: 'POST',
     path: '/api/account/totp/remove',
-    summary: 'Stop using one-time codes',
+    summary: 'Stop using one-time codes; ends the recovery codes too',
     permission: 'signed-in',
     idempotency: 'natural',
-    body: z.strictObject({ code: oneTimeCode }),
+    body: z.strictObject({ code: proof }),
+    problems: ['conflict', 'sign-in-refused'],
+  },
+  'account.renewRecoveryCodes': {
+    method: 'POST',
+    path: '/api/account/recovery-codes',
+    summary: 'Make new recovery codes; those before end',
+    permission: 'signed-in',
+    idempotency: 'natural',
+    body: z.strictObject({ password: z.string().min(1).max(128) }),
+    answer: recoveryCodes,
+    status: 200,
     problems: ['conflict', 'sign-in-refused'],
   },
 });

@@ -11,7 +11,7 @@ export interface FieldRule {
 }
 
 export const formRules: Record<string, Record<string, FieldRule>> = {
-  'session.signIn': {"email":{"required":true,"maxLength":254},"password":{"required":true,"minLength":1,"maxLength":128},"code":{"pattern":"^\\d{6}$"}},
+  'session.signIn': {"email":{"required":true,"maxLength":254},"password":{"required":true,"minLength":1,"maxLength":128},"code":{"pattern":"^\\s{0,4}(\\d{6}|[0-9A-Za-z]{5}[\\s-]?[0-9A-Za-z]{5})\\s{0,4}$"}},
   'session.switch': {"membershipId":{"required":true}},
   'shops.signUp': {"shopName":{"required":true,"minLength":1,"maxLength":120},"name":{"required":true,"minLength":1,"maxLength":120},"email":{"required":true,"maxLength":254},"password":{"required":true,"minLength":8,"maxLength":128},"zone":{"required":true,"maxLength":64},"currency":{"required":true,"pattern":"^[A-Z]{3}$"},"locale":{"pattern":"^[a-z]{2,3}(-[A-Z]{2})?$"}},
   'account.verifyEmail': {"token":{"required":true,"pattern":"^[A-Za-z0-9_-]{43}$"}},
@@ -20,7 +20,8 @@ export const formRules: Record<string, Record<string, FieldRule>> = {
   'account.change': {"name":{"required":true,"minLength":1,"maxLength":120}},
   'account.changePassword': {"current":{"required":true,"minLength":1,"maxLength":128},"password":{"required":true,"minLength":8,"maxLength":128}},
   'account.confirmTotp': {"code":{"required":true,"pattern":"^\\d{6}$"}},
-  'account.removeTotp': {"code":{"required":true,"pattern":"^\\d{6}$"}},
+  'account.removeTotp': {"code":{"required":true,"pattern":"^\\s{0,4}(\\d{6}|[0-9A-Za-z]{5}[\\s-]?[0-9A-Za-z]{5})\\s{0,4}$"}},
+  'account.renewRecoveryCodes': {"password":{"required":true,"minLength":1,"maxLength":128}},
   'invitations.send': {"role":{"required":true},"email":{"required":true,"maxLength":254},"name":{"required":true,"minLength":1,"maxLength":120},"clientId":{},"storeId":{}},
   'invitations.accept': {"name":{"minLength":1,"maxLength":120},"password":{"minLength":8,"maxLength":128}},
   'crew.change': {"role":{},"initials":{"minLength":1,"maxLength":4},"van":{"minLength":0,"maxLength":40},"costPerHour":{"min":0,"max":1000000000000}},

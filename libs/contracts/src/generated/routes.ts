@@ -21,6 +21,7 @@ export const routes = {
   'account.startTotp': ['POST', '/api/account/totp'],
   'account.confirmTotp': ['POST', '/api/account/totp/confirm'],
   'account.removeTotp': ['POST', '/api/account/totp/remove'],
+  'account.renewRecoveryCodes': ['POST', '/api/account/recovery-codes'],
   'invitations.list': ['GET', '/api/invitations'],
   'invitations.send': ['POST', '/api/invitations', true],
   'invitations.resend': ['POST', '/api/invitations/:invitationId/resend', true],

@@ -2,6 +2,7 @@ import { handle } from '../../core/http/route';
 import { changeName, showAccount } from './account';
 import { changePassword } from './change-password';
 import { confirmCodes, removeCodes, startCodes } from './one-time-codes';
+import { renewRecoveryCodes } from './renew-recovery-codes';
 import { completeReset, requestReset } from './reset-password';
 
 export const accountRoutes = [
@@ -13,4 +14,7 @@ export const accountRoutes = [
   handle('account.startTotp', (context) => startCodes(context)),
   handle('account.confirmTotp', (context, { body }) => confirmCodes(context, body.code)),
   handle('account.removeTotp', (context, { body }) => removeCodes(context, body.code)),
+  handle('account.renewRecoveryCodes', (context, { body }) =>
+    renewRecoveryCodes(context, body.password),
+  ),
 ];

@@ -4,6 +4,7 @@ import { type AnswerOf } from '../../core/http/route';
 import { found } from '../../core/problems/problem';
 import { orStale } from '../../core/versions';
 import { personById } from '../session/people';
+import { recoveryCodesLeft } from '../session/recovery-codes';
 import { mayUseCodes } from './one-time-codes';
 
 export async function showAccount(context: SignedInContext): Promise<AnswerOf<'account.show'>> {
@@ -15,6 +16,7 @@ export async function showAccount(context: SignedInContext): Promise<AnswerOf<'a
     emailVerified: person.email_verified_at !== null,
     oneTimeCodes: person.totp_confirmed_at !== null,
     oneTimeCodesOffered: await mayUseCodes(person),
+    recoveryCodesLeft: await recoveryCodesLeft(person.id),
     version: person.version,
   };
 }

@@ -1,11 +1,14 @@
 import QRCode from 'qrcode';
 import { type SignedInContext } from '../../core/context';
-import { platformRow, platformRows } from '../../core/database/tenancy';
+import { platformRow, platformRows, withPlatform } from '../../core/database/tenancy';
 import { type AnswerOf } from '../../core/http/route';
 import { found, problem } from '../../core/problems/problem';
-import { newCodeSecret, takeCode } from '../session/one-time-code';
+import { recordPlatform } from '../platform/record-platform';
+import { newCodeSecret } from '../session/one-time-code';
 import { type Person, personById } from '../session/people';
+import { forgetRecoveryCodes, newRecoveryCodes } from '../session/recovery-codes';
 import { countTry, forgetTries, tryKey } from '../session/sign-in-failures';
+import { takeProof } from '../session/take-proof';
 
 /** Shop owners and platform admins: whose password opens most. */
 export async function mayUseCodes(person: Pick<Person, 'id' | 'platform_admin'>): Promise<boolean> {
@@ -34,25 +37,40 @@ export async function startCodes(context: SignedInContext): Promise<AnswerOf<'ac
   return { secret, uri, qrSvg: await QRCode.toString(uri, { type: 'svg', margin: 4 }) };
 }
 
-export async function confirmCodes(context: SignedInContext, code: string): Promise<void> {
+/** Puts the codes in force, and answers with what lets their owner in without the device. */
+export async function confirmCodes(
+  context: SignedInContext,
+  code: string,
+): Promise<AnswerOf<'account.confirmTotp'>> {
   const person = found(await personById(context.userId));
   if (person.totp_confirmed_at) throw inForce();
   if (!person.totp_secret) throw problem('conflict', 'Begin with a fresh secret first.');
   await demandRightCode(context, person, code);
-  await platformRows('update users set totp_confirmed_at = $now where id = $id', {
-    id: person.id,
-    now: context.now,
+  const recovery = await newRecoveryCodes(person.id);
+  await withPlatform(async () => {
+    const confirmed = await platformRows(
+      `update users set totp_confirmed_at = $now
+       where id = $id and totp_confirmed_at is null returning id`,
+      { id: person.id, now: context.now },
+    );
+    if (!confirmed.length) throw inForce();
+    await recovery.keep();
+    await recordPlatform(context, 'recovery codes made', null);
   });
+  return { recoveryCodes: recovery.shown };
 }
 
 export async function removeCodes(context: SignedInContext, code: string): Promise<void> {
   const person = found(await personById(context.userId));
   if (!person.totp_confirmed_at) throw problem('conflict', 'One-time codes are not in force.');
   await demandRightCode(context, person, code);
-  await platformRows(
-    'update users set totp_secret = null, totp_confirmed_at = null where id = $id',
-    { id: person.id },
-  );
+  await withPlatform(async () => {
+    await platformRows(
+      'update users set totp_secret = null, totp_confirmed_at = null where id = $id',
+      { id: person.id },
+    );
+    await forgetRecoveryCodes(person.id);
+  });
 }
 
 async function demandRightCode(
@@ -62,7 +80,7 @@ async function demandRightCode(
 ): Promise<void> {
   const key = tryKey(person.email, context.sessionId, undefined);
   const heard = await countTry(key, context.now);
-  if (!heard || !(await takeCode(person, code, context.now))) {
+  if (!heard || !(await takeProof(context, person, code))) {
     throw problem('sign-in-refused', 'The code is not right, or was used before.');
   }
   await forgetTries(key);

@@ -7,6 +7,8 @@ export interface PlatformMailParams {
   confirm_sign_up: { name: string; shopName: string; signUpId: string; known: boolean };
   reset_password: { name: string; resetId: string };
   password_changed: { name: string };
+  recovery_code_used: { name: string; left: number };
+  recovery_codes_renewed: { name: string };
   invitation: {
     name: string;
     shopName: string;
@@ -67,6 +69,39 @@ const writers: {
       { link: { label: 'Choose a new password', url: `${config().publicUrl}/forgot-password` } },
     ],
     why: 'We always write when a password is changed.',
+  }),
+
+  recovery_code_used: ({ left }) => ({
+    subject: 'A recovery code was used',
+    pieces: [
+      {
+        words:
+          'One of your recovery codes was used just now in place of a one-time code, together with ' +
+          `your password. ${left === 1 ? '1 is' : `${left} are`} left.`,
+      },
+      {
+        words:
+          'If it was you, make new ones before you run out. If not, choose a new password at once, ' +
+          'then make new recovery codes: somebody knows your password and one of your codes.',
+      },
+      { link: { label: 'Choose a new password', url: `${config().publicUrl}/forgot-password` } },
+      { link: { label: 'Your account', url: `${config().publicUrl}/account` } },
+    ],
+    why: 'We always write when a recovery code is used.',
+  }),
+
+  recovery_codes_renewed: () => ({
+    subject: 'You have new recovery codes',
+    pieces: [
+      { words: 'New recovery codes were made for your account just now. Those before have ended.' },
+      {
+        words:
+          'If it was you, there is nothing to do. If not, choose a new password at once, then make ' +
+          'new recovery codes: whoever made these can sign in as you.',
+      },
+      { link: { label: 'Choose a new password', url: `${config().publicUrl}/forgot-password` } },
+    ],
+    why: 'We always write when recovery codes are made anew.',
   }),
 
   invitation: ({ shopName, invitedBy, as, invitationId }) => ({

@@ -2,9 +2,12 @@ import { v7 as uuid } from 'uuid';
 import { type PlatformContext } from '../../core/context';
 import { platformRows } from '../../core/database/tenancy';
 
-/** Writes down who did what in the platform area, in the transaction that does it. */
+/**
+ * Writes down who did what in the platform area, or to their own account, which belongs to no shop;
+ * in the transaction that does it.
+ */
 export async function recordPlatform(
-  context: PlatformContext,
+  context: Pick<PlatformContext, 'requestId' | 'now' | 'userId' | 'name'>,
   what: string,
   shopId: string | null,
   details: Record<string, unknown> = {},

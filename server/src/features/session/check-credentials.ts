@@ -1,8 +1,8 @@
 import { passwordMatches } from '../../core/auth/password';
 import { type Problem, problem } from '../../core/problems/problem';
-import { takeCode } from './one-time-code';
 import { type Person, personByEmail } from './people';
 import { countTry, forgetTries, giveTryBack, type TryKey } from './sign-in-failures';
+import { takeProof } from './take-proof';
 
 /**
  * One answer for every way to be refused. It must not differ between an unknown address, a wrong
@@ -16,32 +16,37 @@ export function refused(): Problem {
   );
 }
 
+interface Asked {
+  requestId: string;
+  now: Date;
+}
+
 /** The person the credentials belong to. Works as long for an unknown address as for a known one. */
 export async function checkCredentials(
+  context: Asked,
   credentials: { email: string; password: string; code?: string },
   key: TryKey,
-  now: Date,
 ): Promise<Person> {
-  const heard = await countTry(key, now);
+  const heard = await countTry(key, context.now);
   const person = await personByEmail(credentials.email);
   const right = await passwordMatches(credentials.password, person?.password_hash ?? null);
   if (!heard || !right || !person?.email_verified_at) throw refused();
-  if (person.totp_confirmed_at) await demandCode(person, credentials.code, key, now);
+  if (person.totp_confirmed_at) await demandCode(context, person, credentials.code, key);
   await forgetTries(key);
   return person;
 }
 
 async function demandCode(
+  context: Asked,
   person: Person,
   code: string | undefined,
   key: TryKey,
-  now: Date,
 ): Promise<void> {
   if (code === undefined) {
     await giveTryBack(key);
     throw problem('code-required', 'Enter the code your authenticator app shows.');
   }
-  if (!(await takeCode(person, code, now))) {
-    throw problem('sign-in-refused', 'The one-time code is not right, or was used before.');
+  if (!(await takeProof(context, person, code))) {
+    throw problem('sign-in-refused', 'The code is not right, or was used before.');
   }
 }

@@ -33,8 +33,9 @@ export async function takeCode(
   code: string,
   now: Date,
 ): Promise<boolean> {
-  if (!person.totp_secret) return false;
-  const generator = totp(Secret.fromBase32(unseal(person.totp_secret)), person.email);
+  const secret = readable(person.totp_secret);
+  if (secret === null) return false;
+  const generator = totp(Secret.fromBase32(secret), person.email);
   const delta = generator.validate({ token: code, timestamp: now.getTime(), window: 1 });
   if (delta === null) return false;
   const step = Math.floor(now.getTime() / 1000 / period) + delta;
@@ -44,4 +45,13 @@ export async function takeCode(
     { id: person.id, step },
   );
   return taken.length === 1;
+}
+
+/** Sealed under another SESSION_SECRET it cannot be read: no code is right, and that is the answer. */
+function readable(sealed: string | null): string | null {
+  try {
+    return sealed && unseal(sealed);
+  } catch {
+    return null;
+  }
 }

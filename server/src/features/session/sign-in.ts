@@ -18,7 +18,7 @@ export async function signIn(
   http: { request: Request; response: Response },
 ): Promise<SessionAnswer> {
   const key = tryKey(credentials.email, context.source, deviceOf(http.request, credentials.email));
-  const person = await byPassword(http, () => checkCredentials(credentials, key, context.now));
+  const person = await byPassword(http, () => checkCredentials(context, credentials, key));
   // The browser keeps one chain: whoever was signed in on it before is not any longer.
   const before = refreshTokenOf(http.request);
   if (before) await endSessionOf(before);
