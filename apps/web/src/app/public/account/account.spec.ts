@@ -10,6 +10,8 @@ const account = {
   email: 'imre@example.com',
   emailVerified: true,
   oneTimeCodes: false,
+  oneTimeCodesOffered: true,
+  recoveryCodesLeft: 0,
   version: 3,
 };
 const device = {
@@ -19,6 +21,8 @@ const device = {
   device: 'Chromium on Linux',
   current: true,
 };
+
+const recoveryCodes = ['k7mfw-2hqzx', 'p3tvn-9wbcd'];
 
 describe('Account', () => {
   let page: PageUnderTest;
@@ -62,9 +66,19 @@ describe('Account', () => {
     expect(page.text).toContain('This code does not fit.');
     await page.fill('First code', '287082');
     await page.press('Use codes from now on');
-    expect(await page.answer('/api/account/totp/confirm', null, 204)).toEqual({ code: '287082' });
-    await page.answer('/api/account', { ...account, oneTimeCodes: true });
+    const confirmed = await page.answer('/api/account/totp/confirm', { recoveryCodes });
+    expect(confirmed).toEqual({ code: '287082' });
+    await page.answer('/api/account', { ...account, oneTimeCodes: true, recoveryCodesLeft: 2 });
     expect(page.text).toContain('Signing in asks for a code from your authenticator.');
+    for (const code of recoveryCodes) expect(page.text).toContain(code);
+  });
+
+  it('offers one-time codes to nobody who may not use them', async () => {
+    await page.fill('Your name', 'Imre V');
+    await page.press('Save the name');
+    await page.answer('/api/account', { name: 'Imre V', version: 4 });
+    await page.answer('/api/account', { ...account, oneTimeCodesOffered: false });
+    expect(page.text).not.toContain('One-time codes');
   });
 
   it('shows where the person is signed in', () => {

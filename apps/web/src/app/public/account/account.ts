@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, inject, signal, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
 import { type AnswerOf } from '@lib/contracts/web';
 import { PageHead } from '@lib/ui/head/page-head';
 import { ProblemNote } from '@lib/ui/notes/problem-note';
@@ -18,10 +25,21 @@ import { PasswordForm } from './password-form';
     <tw-page-head heading="Your account" [sub]="account()?.email" />
     @if (account(); as shown) {
       <div class="tw-pair">
-        <tw-name-form class="tw-sheet" [account]="shown" (changed)="load()" />
-        <tw-password-form class="tw-sheet" [email]="shown.email" />
-        <tw-one-time-codes class="tw-sheet" [inForce]="shown.oneTimeCodes" (changed)="load()" />
-        <tw-devices class="tw-sheet" />
+        <tw-name-form
+          class="tw-sheet"
+          [class.tw-unprinted]="printsCodes()"
+          [account]="shown"
+          (changed)="load()"
+        />
+        <tw-password-form
+          class="tw-sheet"
+          [class.tw-unprinted]="printsCodes()"
+          [email]="shown.email"
+        />
+        @if (shown.oneTimeCodes || shown.oneTimeCodesOffered) {
+          <tw-one-time-codes class="tw-sheet" [account]="shown" (changed)="load()" />
+        }
+        <tw-devices class="tw-sheet" [class.tw-unprinted]="printsCodes()" />
       </div>
     } @else if (problem(); as failure) {
       <tw-problem [problem]="failure" (retry)="load()" />
@@ -34,6 +52,9 @@ export class Account implements HasChanges {
   readonly #api = inject(Api);
   protected readonly nameForm = viewChild(NameForm);
   protected readonly passwordForm = viewChild(PasswordForm);
+  protected readonly codes = viewChild(OneTimeCodes);
+  /** While recovery codes are shown, they are what a person prints the page for. */
+  protected readonly printsCodes = computed(() => this.codes()?.fresh() !== undefined);
 
   protected readonly account = signal<AnswerOf<'account.show'> | undefined>(undefined);
   protected readonly problem = signal<Problem | undefined>(undefined);

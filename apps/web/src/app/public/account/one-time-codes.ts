@@ -9,7 +9,7 @@ import {
 } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { MatError, MatFormField, MatLabel } from '@angular/material/form-field';
+import { MatError, MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { type AnswerOf } from '@lib/contracts/web';
 import { FieldError } from '@lib/ui/choices/field-error';
@@ -19,6 +19,7 @@ import { type Problem } from '../../core/api/problem';
 import { rulesFor } from '../../core/forms/rules-for';
 import { submission } from '../../core/forms/submission';
 import { Messages } from '../../core/messages/messages';
+import { RecoveryCodes } from './recovery-codes';
 
 /** A second proof at sign-in: codes from an authenticator (RFC 6238). */
 @Component({
@@ -29,9 +30,11 @@ import { Messages } from '../../core/messages/messages';
     MatButton,
     MatError,
     MatFormField,
+    MatHint,
     MatInput,
     MatLabel,
     ReactiveFormsModule,
+    RecoveryCodes,
   ],
   templateUrl: './one-time-codes.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -52,8 +55,14 @@ export class OneTimeCodes {
   readonly #api = inject(Api);
   readonly #messages = inject(Messages);
 
-  readonly inForce = input.required<boolean>();
+  readonly account =
+    input.required<
+      Pick<AnswerOf<'account.show'>, 'email' | 'oneTimeCodes' | 'recoveryCodesLeft'>
+    >();
   readonly changed = output<void>();
+
+  /** Recovery codes that came with putting one-time codes in force, until they are kept. */
+  readonly fresh = signal<readonly string[] | undefined>(undefined);
 
   protected readonly begun = signal<AnswerOf<'account.startTotp'> | undefined>(undefined);
   protected readonly removing = signal(false);
@@ -62,25 +71,35 @@ export class OneTimeCodes {
     () => `data:image/svg+xml,${encodeURIComponent(this.begun()?.qrSvg ?? '')}`,
   );
 
-  protected readonly form = inject(NonNullableFormBuilder).group({
+  readonly #build = inject(NonNullableFormBuilder);
+  protected readonly form = this.#build.group({
     code: ['', [Validators.required, ...rulesFor('account.confirmTotp', 'code')]],
+  });
+  protected readonly stopForm = this.#build.group({
+    code: ['', [Validators.required, ...rulesFor('account.removeTotp', 'code')]],
   });
 
   protected readonly confirming = submission(
     this.form,
     () => this.#api.call('account.confirmTotp', { body: this.form.getRawValue() }),
     {
-      done: () => this.#settle('From now on, signing in asks for a one-time code.'),
-      refused: (problem) => this.#refused(problem),
+      done: ({ recoveryCodes }) => {
+        this.fresh.set(recoveryCodes);
+        this.#settle('From now on, signing in asks for a one-time code.');
+      },
+      refused: (problem) => this.#refused(problem, this.form),
     },
   );
 
   protected readonly stopping = submission(
-    this.form,
-    () => this.#api.call('account.removeTotp', { body: this.form.getRawValue() }),
+    this.stopForm,
+    () => this.#api.call('account.removeTotp', { body: this.stopForm.getRawValue() }),
     {
-      done: () => this.#settle('Signing in no longer asks for a one-time code.'),
-      refused: (problem) => this.#refused(problem),
+      done: () => {
+        this.fresh.set(undefined);
+        this.#settle('Signing in no longer asks for a one-time code.');
+      },
+      refused: (problem) => this.#refused(problem, this.stopForm),
     },
   );
 
@@ -96,6 +115,7 @@ export class OneTimeCodes {
     this.begun.set(undefined);
     this.removing.set(false);
     this.form.reset();
+    this.stopForm.reset();
   }
 
   #settle(said: string): void {
@@ -104,9 +124,9 @@ export class OneTimeCodes {
     this.changed.emit();
   }
 
-  #refused(problem: Problem): boolean {
+  #refused(problem: Problem, form: typeof this.form): boolean {
     if (problem.kind !== 'sign-in-refused') return false;
-    this.form.controls.code.setErrors({ server: 'This code does not fit. Try the next one.' });
+    form.controls.code.setErrors({ server: 'This code does not fit. Try the next one.' });
     return true;
   }
 }

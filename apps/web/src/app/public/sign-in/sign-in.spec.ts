@@ -106,4 +106,20 @@ describe('SignIn', () => {
       code: '287082',
     });
   });
+
+  it('takes a recovery code in place of a one-time code', async () => {
+    const refusal = { type: '/problems/code-required', title: 'A code is needed', status: 401 };
+    await fill('E-mail address', 'imre@example.com');
+    await fill('Password', 'laundry soap');
+    await send();
+    await answered(refusal, unauthorized);
+    const other = MatButtonHarness.with({ text: 'Authenticator lost? Use a recovery code' });
+    await (await loader().getHarness(other)).click();
+    const field = document.querySelector<HTMLInputElement>('#tw-sign-in-code');
+    expect(field?.inputMode || field?.getAttribute('inputmode')).toBe('text');
+
+    await fill('Recovery code', 'k7mfw-2hqzx');
+    await send();
+    expect(await answered(anAnswer())).toMatchObject({ code: 'k7mfw-2hqzx' });
+  });
 });

@@ -35,6 +35,12 @@ import { Session } from '../../core/session/session';
     .below {
       margin-block: 1.5rem 0;
     }
+    .other {
+      justify-self: start;
+      max-inline-size: 100%;
+      block-size: auto;
+      min-block-size: 2.5rem;
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -47,6 +53,8 @@ export class SignIn {
   readonly next = input<string>();
 
   protected readonly asksCode = signal(false);
+  /** The code typed is a recovery code: letters too, and no authenticator to fill it in. */
+  protected readonly recovers = signal(false);
   protected readonly form = this.#build.group({
     email: ['', rulesFor('session.signIn', 'email')],
     password: ['', rulesFor('session.signIn', 'password')],
@@ -61,7 +69,7 @@ export class SignIn {
       this.asksCode.set(true);
       if (again)
         this.form.controls.code.setErrors({ server: 'This code does not fit. Try the next one.' });
-      else setTimeout(() => document.querySelector<HTMLElement>('#tw-sign-in-code')?.focus());
+      else this.#toCode();
       return true;
     },
   });
@@ -70,6 +78,16 @@ export class SignIn {
     void this.#session.start().then(() => {
       if (this.#session.signedIn()) void this.#goOn();
     });
+  }
+
+  protected switchProof(): void {
+    this.recovers.update((recovers) => !recovers);
+    this.form.controls.code.reset();
+    this.#toCode();
+  }
+
+  #toCode(): void {
+    setTimeout(() => document.querySelector<HTMLElement>('#tw-sign-in-code')?.focus());
   }
 
   #signIn(): Promise<void> {
