@@ -85,7 +85,7 @@ export class OneTimeCodes {
     {
       done: ({ recoveryCodes }) => {
         this.fresh.set(recoveryCodes);
-        this.#settle('From now on, signing in asks for a one-time code.');
+        this.#settle();
       },
       refused: (problem) => this.#refused(problem, this.form),
     },
@@ -118,9 +118,10 @@ export class OneTimeCodes {
     this.stopForm.reset();
   }
 
-  #settle(said: string): void {
+  /** Without words when the page shows what is done: a message would lie over the codes. */
+  #settle(said?: string): void {
     this.leave();
-    this.#messages.say(said);
+    if (said) this.#messages.say(said);
     this.changed.emit();
   }
 
