@@ -267,6 +267,13 @@ describe('visits', () => {
       'Belt tightened',
       'Belt replaced',
     ]);
+    const searched = await as('tech').call('machines.history', {
+      ...ask,
+      query: { q: 'replaced' },
+    });
+    expect(searched.body.items.map((job: { action: string }) => job.action)).toEqual([
+      'Belt replaced',
+    ]);
     const attendant = await buildPerson(scene.shop, 'attendant', {
       clientId: scene.clientId,
       storeId: scene.storeId,

@@ -85,7 +85,7 @@ export const ledgerOperations = defineOperations({
         storeId: id.optional(),
         clientId: id.optional(),
       },
-    }),
+    }).omit({ q: true }),
     answer: listOf(entry),
   },
   'ledger.journal': {

@@ -130,7 +130,7 @@ export const monthCloseOperations = defineOperations({
     path: '/api/closes',
     summary: 'Month closes, newest first',
     permission: 'statements.close',
-    query: listQuery({ sort: ['-month'] }),
+    query: listQuery({ sort: ['-month'] }).omit({ q: true }),
     answer: listOf(runItem),
   },
   'statements.run': {

@@ -140,7 +140,7 @@ export const priceOperations = defineOperations({
     path: '/api/editions',
     summary: 'Editions of the price book, the latest first',
     permission: 'prices.read',
-    query: listQuery({ sort: ['-validFrom'] }),
+    query: listQuery({ sort: ['-validFrom'] }).omit({ q: true }),
     answer: listOf(editionSummary),
   },
   'editions.show': {

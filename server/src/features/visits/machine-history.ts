@@ -2,7 +2,7 @@ import { type Cause, type JobResult, type MachineState, type Symptom } from '@li
 import { type Context } from '../../core/context';
 import { type Bind, row, withTenant } from '../../core/database/tenancy';
 import { type AnswerOf, type InputOf } from '../../core/http/route';
-import { page } from '../../core/lists/keyset';
+import { page, searched } from '../../core/lists/keyset';
 import { found } from '../../core/problems/problem';
 import { ownStore } from '../stores/own-store';
 import { workedOnColumn } from './job-reference';
@@ -46,6 +46,7 @@ export function machineHistory(
       ),
     );
     const seesTickets = context.role !== 'attendant';
+    const ofMachine: Bind = { shopId: context.shopId, machineId };
     const list = await page<HistoryRow, Omit<Item, 'parts'>>(
       {
         select: `select j.id as "jobId", v.id as "visitId", v.number as "visitNumber", j.position,
@@ -57,8 +58,12 @@ export function machineHistory(
           from ${historyFrom} join shops h on h.id = j.shop_id
           left join tickets t on t.shop_id = v.shop_id and t.id = v.ticket_id`,
         from: historyFrom,
-        where: ['j.shop_id = $shopId', 'j.machine_id = $machineId'],
-        bind: { shopId: context.shopId, machineId },
+        where: [
+          'j.shop_id = $shopId',
+          'j.machine_id = $machineId',
+          ...searched(query.q, ['j.finding', 'j.action'], ofMachine),
+        ],
+        bind: ofMachine,
         sort: { column: 'j.created_at', type: 'timestamptz', descending: true },
         id: 'j.id',
         limit: query.limit,
