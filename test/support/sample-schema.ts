@@ -83,6 +83,17 @@ function sampleNumber(schema: JsonSchema, random: Random): number {
   return low + random.below(high - low + 1);
 }
 
+const matching = new Map<string, string[]>();
+
+/** Some texts a pattern allows, the same in each run; reading a pattern costs more than a request. */
+function textsMatching(pattern: string): string[] {
+  const known =
+    matching.get(pattern) ??
+    fc.sample(fc.stringMatching(new RegExp(pattern)), { numRuns: 100, seed: pattern.length });
+  matching.set(pattern, known);
+  return known;
+}
+
 function sampleText(schema: JsonSchema, options: SampleOptions, name: string): string {
   const { random } = options;
   switch (schema.format) {
@@ -99,8 +110,7 @@ function sampleText(schema: JsonSchema, options: SampleOptions, name: string): s
   }
   if (name === 'zone') return random.pick(['Europe/Vienna', 'America/Chicago']);
   if (schema.pattern) {
-    const arbitrary = fc.stringMatching(new RegExp(schema.pattern));
-    return fc.sample(arbitrary, { numRuns: 1, seed: random.below(2 ** 31) })[0] as string;
+    return random.pick(textsMatching(schema.pattern));
   }
   const length = Math.max(schema.minLength ?? 1, Math.min(schema.maxLength ?? 12, 12));
   const text = Array.from({ length }, () => random.pick([...'abcdefghij mnoprst'])).join('');
