@@ -78,6 +78,7 @@ export async function jest(
   projects: readonly string[],
   env: Env,
   more: readonly string[] = [],
+  lanes = 2,
 ): Promise<Tally> {
   progress.say(`\nTests of ${projects.join(', ')}`);
   mkdirSync(results, { recursive: true });
@@ -87,7 +88,7 @@ export async function jest(
     '--selectProjects',
     ...projects,
     '--ci',
-    '--maxWorkers=2',
+    `--maxWorkers=${lanes}`,
     '--passWithNoTests',
     '--json',
     `--outputFile=${file}`,
