@@ -19,7 +19,7 @@ const lanes = 3;
 /** Mails after which the page of a month close is told how far it is. */
 const tellEvery = 20;
 /** Due mails looked up at once. */
-const ahead = 30;
+const ahead = 60;
 
 /** A mail that was due when it was looked up; whose it is to hand over, `claim` decides. */
 interface DueMail {
@@ -46,17 +46,38 @@ export const sendDeliveriesJob: Job = {
   },
 };
 
+/** Shops whose mails this process is sending; `again` when it was woken for one meanwhile. */
+const sending = new Map<string, { again: boolean }>();
+
 /** Hands over every mail of a shop that is due. */
 export async function sendDeliveries(context: Context, config: Config): Promise<void> {
+  const before = sending.get(context.shopId);
+  if (before) {
+    before.again = true;
+    return;
+  }
+  const work = { again: true };
+  sending.set(context.shopId, work);
+  try {
+    while (work.again) {
+      work.again = false;
+      await sendDue(context, config);
+    }
+  } finally {
+    sending.delete(context.shopId);
+  }
+}
+
+async function sendDue(context: Context, config: Config): Promise<void> {
   const shop = await withTenant(context, () => shopFacts(context));
   const runs = new Set<string>();
-  const line: DueMail[] = [];
+  const line = mailLine(context);
   const lane = async () => {
     const session = mailSession(config.mail);
     try {
       let sent = 0;
-      let next = await withTenant(context, () => claimNext(context, line));
-      while (next) {
+      let next: Claimed | undefined;
+      while ((next ??= await claimFrom(context, line))) {
         const { runId } = next;
         runs.add(runId);
         next = await workOne(context, shop, config, session, next, line);
@@ -73,6 +94,36 @@ export async function sendDeliveries(context: Context, config: Config): Promise<
   if (broken) throw broken.reason;
 }
 
+interface MailLine {
+  mails: DueMail[];
+  /** Looks due mails up once, however many lanes wait for it. */
+  fill(): Promise<void>;
+}
+
+function mailLine(context: Context): MailLine {
+  let filling: Promise<void> | undefined;
+  const line: MailLine = {
+    mails: [],
+    fill() {
+      filling ??= withTenant(context, () => dueMails(context))
+        .then((due) => void line.mails.push(...due))
+        .finally(() => (filling = undefined));
+      return filling;
+    },
+  };
+  return line;
+}
+
+/** The first mail for a lane; nothing when nothing is due. */
+async function claimFrom(context: Context, line: MailLine): Promise<Claimed | undefined> {
+  for (;;) {
+    if (line.mails.length === 0) await line.fill();
+    if (line.mails.length === 0) return undefined;
+    const claimed = await withTenant(context, () => claimNext(context, line));
+    if (claimed) return claimed;
+  }
+}
+
 /** Hands one over, writes down how that ended and takes the next, both with the same commit. */
 async function workOne(
   context: Context,
@@ -80,7 +131,7 @@ async function workOne(
   config: Config,
   session: MailSession,
   claimed: Claimed,
-  line: DueMail[],
+  line: MailLine,
 ): Promise<Claimed | undefined> {
   const settled = settle(
     await handOver(context, shop, config, session, claimed),
@@ -111,28 +162,45 @@ async function persistently<T>(work: () => Promise<T>): Promise<T> {
   return work();
 }
 
-/** The next mail of the line that is still to be had; the line is filled anew when it is empty. */
-async function claimNext(context: Context, line: DueMail[]): Promise<Claimed | undefined> {
-  for (;;) {
-    if (line.length === 0) line.push(...(await dueMails(context)));
-    const mail = line.shift();
-    if (!mail) return undefined;
+/** The next mail of the line that is still to be had; nothing when the line is at its end. */
+async function claimNext(context: Context, line: MailLine): Promise<Claimed | undefined> {
+  for (let mail = line.mails.shift(); mail; mail = line.mails.shift()) {
     const attempt = await claim(context, mail);
     if (attempt !== undefined) return { ...mail, attempt };
   }
+  return undefined;
 }
 
+/**
+ * Which are due is asked first, and each is then looked up by its key: in the middle of a close the
+ * tables have grown since PostgreSQL last counted them, and it would join them by reading all.
+ */
 function dueMails(context: Context): Promise<DueMail[]> {
   return rows<DueMail>(
-    `select d.id, d.recipient, d.recipient_name as "recipientName", d.subject,
+    `with due as materialized (
+       select w.id, w.statement_id, w.next_attempt_at from deliveries w
+       where w.shop_id = $shopId and w.state = 'waiting' and w.next_attempt_at <= now()
+         and (select r.state from statements t
+           join statement_runs r on r.shop_id = t.shop_id and r.id = t.run_id
+           where t.shop_id = w.shop_id and t.id = w.statement_id limit 1) <> 'held'
+       order by w.next_attempt_at, w.id limit ${ahead}
+     )
+     select d.id, d.recipient, d.recipient_name as "recipientName", d.subject,
        d.message_id as "messageId", s.id as "statementId", s.run_id as "runId", s.snapshot,
        a.name as "fileName", a.sha256
-     from deliveries d
-     join statements s on s.shop_id = d.shop_id and s.id = d.statement_id
-     join statement_runs r on r.shop_id = s.shop_id and r.id = s.run_id and r.state <> 'held'
-     left join attachments a on a.shop_id = s.shop_id and a.owner_kind = 'statement' and a.owner_id = s.id
-     where d.shop_id = $shopId and d.state = 'waiting' and d.next_attempt_at <= now()
-     order by d.next_attempt_at, d.id limit ${ahead}`,
+     from due
+     cross join lateral (
+       select * from deliveries where shop_id = $shopId and id = due.id limit 1
+     ) d
+     cross join lateral (
+       select * from statements where shop_id = $shopId and id = due.statement_id limit 1
+     ) s
+     left join lateral (
+       select name, sha256 from attachments
+       where shop_id = $shopId and owner_kind = 'statement' and owner_id = due.statement_id
+       limit 1
+     ) a on true
+     order by due.next_attempt_at, due.id`,
     { shopId: context.shopId },
   );
 }

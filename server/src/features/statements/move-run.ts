@@ -10,7 +10,7 @@ interface RunCounts {
   waiting: number;
   built: number;
   failed: number;
-  unsent: number;
+  unsent: boolean;
 }
 
 /**
@@ -38,7 +38,7 @@ export function moveRun(context: Context, runId: string, steps: readonly RunStep
     await announce(context, 'statement-run', runId);
     if (steps.includes('build') && counts.waiting > 0) await enqueue('statements-build', bind);
     if (steps.includes('render') && counts.built > 0) await enqueue('statements-render', bind);
-    if (steps.includes('send') && counts.unsent > 0) {
+    if (steps.includes('send') && counts.unsent) {
       await enqueue('deliveries-send', { shopId: context.shopId });
     }
   });
@@ -50,9 +50,9 @@ async function countRun(bind: { shopId: string; runId: string }): Promise<RunCou
        count(*) filter (where s.state = 'waiting')::int as waiting,
        count(*) filter (where s.state = 'built')::int as built,
        count(*) filter (where s.state = 'failed')::int as failed,
-       (select count(*)::int from deliveries d join statements t
+       exists (select 1 from deliveries d join statements t
           on t.shop_id = d.shop_id and t.id = d.statement_id
-        where t.shop_id = $shopId and t.run_id = $runId
+        where d.shop_id = $shopId and t.run_id = $runId
           and d.state in ('waiting', 'handing_over')) as unsent
      from statement_run_stores s where s.shop_id = $shopId and s.run_id = $runId`,
     bind,
@@ -62,7 +62,7 @@ async function countRun(bind: { shopId: string; runId: string }): Promise<RunCou
 
 function stateOf({ waiting, built, failed, unsent }: RunCounts) {
   if (waiting + built > 0) return { state: 'building', problem: null, ended: false };
-  if (unsent > 0) return { state: 'sending', problem: null, ended: false };
+  if (unsent) return { state: 'sending', problem: null, ended: false };
   if (failed === 0) return { state: 'done', problem: null, ended: true };
   const words = failed === 1 ? 'One statement' : `${failed} statements`;
   return { state: 'failed', problem: `${words} could not be made.`, ended: true };
