@@ -2,7 +2,7 @@ import { type Mailbox } from '../../infra/fakes/mailbox/mailbox';
 import { systemContext } from '../../server/src/core/context';
 import { rows } from '../../server/src/core/database/tenancy';
 import { mostAttempts } from '../../server/src/core/mail/settle';
-import { sweepDeliveries } from '../../server/src/features/deliveries/send-deliveries';
+import { sweepDeliveries } from '../../server/src/features/deliveries/sweep-deliveries';
 import { api } from '../support/api';
 import { type TestServer } from '../support/app';
 import {

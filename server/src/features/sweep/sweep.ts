@@ -3,7 +3,7 @@ import { platformRows, row, withTenant, write } from '../../core/database/tenanc
 import { enqueueNow } from '../../core/jobs/boss';
 import { type Job } from '../../core/jobs/work';
 import { type Log } from '../../core/logging';
-import { sweepDeliveries } from '../deliveries/send-deliveries';
+import { sweepDeliveries } from '../deliveries/sweep-deliveries';
 import { sweepImports } from '../imports/work-import';
 import { sweepPayments } from '../payments/sweep-payments';
 import { sweepStripeEvents } from '../payments/work-stripe-event';
