@@ -185,6 +185,8 @@ describe('recovery codes', () => {
     expect(
       await platformRow('select 1 from recovery_codes where user_id = $id', { id: person.userId }),
     ).toBeUndefined();
+    expect(await mailsTo(person, 'one_time_codes_stopped')).toHaveLength(1);
+    expect(await auditOf(person)).toContain('one-time codes stopped');
   });
 
   it('open the account also when the secret of the one-time codes cannot be read any longer', async () => {

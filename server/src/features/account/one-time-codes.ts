@@ -4,6 +4,7 @@ import { platformRow, platformRows, withPlatform } from '../../core/database/ten
 import { type AnswerOf } from '../../core/http/route';
 import { found, problem } from '../../core/problems/problem';
 import { recordPlatform } from '../platform/record-platform';
+import { queuePlatformMail } from '../platform-mails/queue-platform-mail';
 import { newCodeSecret } from '../session/one-time-code';
 import { type Person, personById } from '../session/people';
 import { forgetRecoveryCodes, newRecoveryCodes } from '../session/recovery-codes';
@@ -70,6 +71,13 @@ export async function removeCodes(context: SignedInContext, code: string): Promi
       { id: person.id },
     );
     await forgetRecoveryCodes(person.id);
+    await recordPlatform(context, 'one-time codes stopped', null);
+    await queuePlatformMail({
+      to: person.email,
+      template: 'one_time_codes_stopped',
+      params: { name: person.name },
+      dedupeKey: `one_time_codes_stopped:${person.id}:${context.requestId}`,
+    });
   });
 }
 

@@ -9,6 +9,7 @@ export interface PlatformMailParams {
   password_changed: { name: string };
   recovery_code_used: { name: string; left: number };
   recovery_codes_renewed: { name: string };
+  one_time_codes_stopped: { name: string };
   invitation: {
     name: string;
     shopName: string;
@@ -102,6 +103,25 @@ const writers: {
       { link: { label: 'Choose a new password', url: `${config().publicUrl}/forgot-password` } },
     ],
     why: 'We always write when recovery codes are made anew.',
+  }),
+
+  one_time_codes_stopped: () => ({
+    subject: 'One-time codes are off',
+    pieces: [
+      {
+        words:
+          'Signing in to your account asks for no one-time code any longer, since just now. Your ' +
+          'recovery codes have ended with them.',
+      },
+      {
+        words:
+          'If it was you, there is nothing to do. If not, choose a new password at once, then put ' +
+          'one-time codes in force again: somebody had your account open.',
+      },
+      { link: { label: 'Choose a new password', url: `${config().publicUrl}/forgot-password` } },
+      { link: { label: 'Your account', url: `${config().publicUrl}/account` } },
+    ],
+    why: 'We always write when one-time codes are switched off.',
   }),
 
   invitation: ({ shopName, invitedBy, as, invitationId }) => ({
