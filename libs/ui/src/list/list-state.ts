@@ -147,8 +147,8 @@ export class ListState<T, S extends string, F extends Filters> implements ListCo
   }
 
   clear(): void {
-    const any = Object.fromEntries(Object.keys(this.#startFilters).map((name) => [name, '']));
-    this.#change({ q: '', filters: any as F });
+    const unset = Object.fromEntries(Object.keys(this.#startFilters).map((name) => [name, '']));
+    this.#change({ q: '', filters: unset as F });
   }
 
   next(): void {

@@ -23,7 +23,7 @@ const states: readonly Choice[] = [
     <tw-page-head heading="Rounds" upLink="/shop/contracts" upLabel="Contracts" />
     <tw-list-shell
       [list]="rounds"
-      searchLabel="Search by store or contract"
+      searchLabel="Search rounds"
       empty="Rounds of your contracts appear here a while before they are due, each with its visit."
       [csv]="true"
       (csvAsked)="save()"
